@@ -1,0 +1,208 @@
+package document
+
+import (
+	"math"
+	"regexp"
+	"strconv"
+	"strings"
+	"unicode"
+
+	"gopkg.in/yaml.v3"
+
+	"ebbleaf/predict"
+)
+
+// Bounds of constants: no constituent anywhere reaches half of maxAmplitude,
+// and lags are written either from 0 to 360 or from -180 to 180 degrees; what
+// goes farther than a turn beyond is a slip.
+const (
+	maxAmplitude = 20.0 // metres
+	minLag       = -360.0
+	maxLag       = 720.0
+)
+
+// maxConstituents bounds the constants of one harbour.
+const maxConstituents = 500
+
+var zoneOfPhases = regexp.MustCompile(`^([+-])([0-9]{2}):([0-9]{2})$`)
+
+// readPhases reads what the phase lags are reckoned on.
+func (h *harbourFile) readPhases(r *reader, what string, n *yaml.Node) {
+	const wanted = "greenwich, local or the zone of the constants such as +01:00"
+	s, ok := r.scalar(what, wanted, n)
+	if !ok {
+		return
+	}
+	switch fold(s) {
+	case "greenwich":
+		h.phases = predict.Greenwich()
+		return
+	case "local":
+		h.phases, h.local = predict.Local(), true
+		return
+	}
+	m := zoneOfPhases.FindStringSubmatch(strings.ReplaceAll(s, "\u2212", "-"))
+	if m == nil {
+		if near, ok := nearest(s, []string{"greenwich", "local"}); ok {
+			r.fault(n, "%s is %s; did you mean %s?", what, quote(s), near)
+		} else {
+			r.fault(n, "%s is %s: %s is wanted", what, quote(s), wanted)
+		}
+		return
+	}
+	hours, _ := strconv.Atoi(m[2])
+	minutes, _ := strconv.Atoi(m[3])
+	ahead := float64(hours) + float64(minutes)/60
+	if m[1] == "-" {
+		ahead = -ahead
+	}
+	if minutes >= 60 || ahead < -12 || ahead > 14 {
+		r.fault(n, "%s is %s: zones run from -12:00 to +14:00", what, quote(s))
+		return
+	}
+	h.phases = predict.Zonal(ahead)
+}
+
+// constants reads the constants, as a group of constituents or as the name of
+// a table.
+func (h *harbourFile) constants(r *reader, what string, n *yaml.Node) {
+	const wanted = "a group of constituents such as M2: [1.712, 134.2], or the name of a CSV file,"
+	if n.Kind == yaml.ScalarNode {
+		if name, ok := r.scalar(what, wanted, n); ok {
+			h.table(r, what, name, n)
+		}
+		return
+	}
+	seen := map[string]entry{}
+	for _, e := range r.entries(what, wanted, n) {
+		c, problem := constituent(e.name)
+		if problem != "" {
+			r.fault(e.key, "%s", problem)
+			continue
+		}
+		if first, twice := seen[c.Name]; twice {
+			r.fault(e.key, "%s names the same constituent as %s on line %d", e.name, first.name, first.key.Line)
+			continue
+		}
+		seen[c.Name] = e
+		amplitude, lag, ok := h.pair(r, e.name, e.value)
+		if !ok {
+			continue
+		}
+		h.harbour.Constants = append(h.harbour.Constants, h.constant(c, amplitude, lag))
+	}
+}
+
+// constant makes constants in metres and on the Greenwich argument.
+func (h *harbourFile) constant(c predict.Constituent, amplitude, lag float64) predict.Constant {
+	return predict.Constant{
+		Constituent: c,
+		Amplitude:   amplitude * h.unit().Metres,
+		Lag:         h.phases.GreenwichLag(c, lag, h.harbour.Position.Lon.Degrees()),
+	}
+}
+
+// pair reads the amplitude, in the unit of the file, and the phase lag of a
+// constituent.
+func (h *harbourFile) pair(r *reader, name string, n *yaml.Node) (amplitude, lag float64, ok bool) {
+	const wanted = "[amplitude, phase lag], such as [1.712, 134.2],"
+	var at struct{ amplitude, lag *yaml.Node }
+	keep := func(dst **yaml.Node) value {
+		return func(_ *reader, _ string, n *yaml.Node) { *dst = n }
+	}
+	switch {
+	case r.spoilt[n]:
+		return
+	case n.Kind == yaml.MappingNode:
+		r.group(name, wanted, n, []key{
+			{"amplitude", name + " needs one", keep(&at.amplitude)},
+			{"phase", name + " needs one", keep(&at.lag)},
+		})
+	case n.Kind == yaml.SequenceNode && len(n.Content) == 2:
+		at.amplitude, at.lag = n.Content[0], n.Content[1]
+	case n.Kind == yaml.SequenceNode && len(n.Content) > 2:
+		r.fault(n, "%s has %d values: %s is wanted, decimals with a point", name, len(n.Content), wanted)
+	case n.Kind == yaml.SequenceNode && len(n.Content) == 1:
+		r.fault(n, "%s has one value: %s is wanted", name, wanted)
+	default:
+		r.fault(n, "%s is %s: %s is wanted", name, r.kind(n), wanted)
+	}
+	ok = at.amplitude != nil && at.lag != nil
+	if at.amplitude != nil {
+		x, good := r.number("the amplitude of "+name, at.amplitude)
+		if good {
+			if problem := h.amplitudeProblem(name, x); problem != "" {
+				r.fault(at.amplitude, "%s", problem)
+			}
+		}
+		amplitude, ok = x, ok && good
+	}
+	if at.lag != nil {
+		x, good := r.number("the phase lag of "+name, at.lag)
+		if good {
+			if problem := lagProblem(name, x); problem != "" {
+				r.fault(at.lag, "%s", problem)
+			}
+		}
+		lag, ok = x, ok && good
+	}
+	return amplitude, lag, ok
+}
+
+// amplitudeProblem says what is wrong with an amplitude in the file's unit, or
+// nothing.
+func (h *harbourFile) amplitudeProblem(name string, x float64) string {
+	unit := h.unit()
+	switch {
+	case x < 0:
+		return "the amplitude of " + name + " is " + plain(x) + ": it cannot be negative; make it positive and turn the phase lag by 180 degrees"
+	case x*unit.Metres > maxAmplitude:
+		return "the amplitude of " + name + " is " + plain(x) + " " + unit.Symbol + ": no tide is larger than " +
+			plain(math.Floor(maxAmplitude/unit.Metres)) + " " + unit.Symbol
+	}
+	return ""
+}
+
+// lagProblem says what is wrong with a phase lag in degrees, or nothing.
+func lagProblem(name string, x float64) string {
+	if x < minLag || x > maxLag {
+		return "the phase lag of " + name + " is " + plain(x) + ": it must lie from " + plain(minLag) + " to " + plain(maxLag) + " degrees"
+	}
+	return ""
+}
+
+// constituent finds a constituent by name. Problem says what may have been
+// meant, or nothing.
+func constituent(name string) (c predict.Constituent, problem string) {
+	name = tidy(name)
+	if c, ok := predict.Lookup(name); ok {
+		return c, ""
+	}
+	unknown := "the constituent " + quote(name) + " is not known"
+	if strings.EqualFold(name, "Z0") || strings.EqualFold(name, "A0") || strings.EqualFold(name, "S0") {
+		return c, quote(name) + " is the mean level, not a constituent: give it as mean-level"
+	}
+	// The Greek letters of Darwin's names, and names with signs in them.
+	latin := strings.NewReplacer("Μ", "MU", "Ν", "NU", "Λ", "LAM", "Ρ", "RHO").Replace(strings.ToUpper(strings.ReplaceAll(name, "µ", "μ")))
+	latin = strings.Map(func(r rune) rune {
+		if unicode.IsLetter(r) || unicode.IsDigit(r) {
+			return r
+		}
+		return -1
+	}, latin)
+	if c, ok := predict.Lookup(latin); ok {
+		return c, unknown + "; did you mean " + c.Name + "?"
+	}
+	var names []string
+	for _, c := range predict.Constituents() {
+		names = append(names, c.Name)
+	}
+	switch near := nearby(name, names); {
+	case len(near) == 0:
+		return c, unknown + ": leave it out, or see that its name is spelt as Schureman has it"
+	case len(near) == 1:
+		return c, unknown + "; did you mean " + near[0] + "?"
+	default:
+		return c, unknown + "; near it are " + join(near[:min(len(near), 6)], "and")
+	}
+}
