@@ -1,0 +1,110 @@
+package layout
+
+import (
+	"errors"
+	"fmt"
+	"time"
+
+	"ebbleaf/layout/page"
+)
+
+// book is a booklet being made.
+type book struct {
+	almanac *Almanac
+	measure page.Measurer
+	styles  styles
+	doc     page.Document
+}
+
+// Make sets an almanac page by page:
+//
+//	cover │ how to read it, cautions
+//	then for each harbour
+//	springs, neaps and Moon │ each month: tides (left), sky (right) │ sources
+//
+// It reports a harbour whose constants cannot be used, and matter that does
+// not fit its page, with what to change.
+func Make(a *Almanac, m page.Measurer) (*page.Document, error) {
+	if len(a.Harbours) == 0 {
+		return nil, errors.New("the almanac names no harbour")
+	}
+	b := &book{almanac: a, measure: m, styles: bookletStyles(a.Paper)}
+	first := a.Harbours[0]
+	b.doc = page.Document{
+		Title:    a.title(),
+		Author:   a.Publisher,
+		Subject:  a.Words.Say("cover.subject", "harbour", first.Name),
+		Language: a.Words.Tag,
+		Dated:    page.Date{Year: a.From.Year, Month: int(a.From.Month), Day: a.From.Day},
+	}
+	var spans []*span
+	for _, h := range a.Harbours {
+		s, err := newSpan(h, a.From, a.To)
+		if err != nil {
+			return nil, fmt.Errorf("%s: %w", h.Name, err)
+		}
+		spans = append(spans, s)
+	}
+	b.cover(spans)
+	if err := b.reading(spans[0]); err != nil {
+		return nil, err
+	}
+	for _, s := range spans {
+		if err := b.fortnights(s); err != nil {
+			return nil, err
+		}
+		if err := b.monthSpreads(s); err != nil {
+			return nil, err
+		}
+		if err := b.sources(s); err != nil {
+			return nil, err
+		}
+	}
+	return &b.doc, nil
+}
+
+// title returns the title of the document: the cover's words in one line.
+func (a *Almanac) title() string {
+	name := a.Title
+	if name == "" {
+		name = a.Harbours[0].Name
+	}
+	return a.Words.Say("cover.title", "name", name, "period", a.period())
+}
+
+// period names the time an almanac covers.
+func (a *Almanac) period() string {
+	f := a.format(time.UTC)
+	return f.period(a.From, a.To)
+}
+
+// finish numbers a sheet and puts it into the book.
+func (b *book) finish(s *sheet) {
+	s.Label = fmt.Sprint(len(b.doc.Pages) + 1)
+	b.doc.Pages = append(b.doc.Pages, s.Page)
+}
+
+// foot sets the short caution and the page number, which every page carries.
+// It returns the y that matter above must keep clear of.
+func (b *book) foot(s *sheet) float64 {
+	number := fmt.Sprint(len(b.doc.Pages) + 1)
+	st := b.styles
+	base := s.area.Bottom() - st.caution.descent()
+	numberWidth := s.width(st.folio, number) + 3
+	box := page.Rect{X: s.area.X, W: s.area.W - numberWidth}
+	x, align := s.area.Right(), page.Right
+	if s.left {
+		box.X += numberWidth
+		x, align = s.area.X, page.Left
+	}
+	s.text(x, base, align, st.folio, number, s.area)
+	lines := page.Break(s.measure, st.caution.face, st.caution.size, box.W, b.almanac.Words.Say("caution.short"))
+	top := base - float64(len(lines)-1)*st.caution.leading()
+	for i, line := range lines {
+		y := top + float64(i)*st.caution.leading()
+		s.text(box.X, y, page.Left, st.caution, line, s.area)
+	}
+	rule := top - st.caution.ascent() - 0.9
+	s.put(page.Rule(s.area.X, rule, s.area.Right(), rule, hairline, page.Black))
+	return rule - 1.2
+}

@@ -1,0 +1,203 @@
+package layout_test
+
+import (
+	"fmt"
+	"path/filepath"
+	"strings"
+	"testing"
+
+	"ebbleaf/layout"
+	"ebbleaf/layout/calendar"
+	"ebbleaf/layout/document"
+	"ebbleaf/layout/face"
+	"ebbleaf/layout/page"
+	"ebbleaf/layout/page/pagetest"
+	"ebbleaf/predict"
+	"ebbleaf/templates"
+)
+
+// faces returns the real faces, so that widths are those of the print.
+func faces(t testing.TB) *face.Set {
+	t.Helper()
+	set, err := face.Load(templates.Fonts())
+	if err != nil {
+		t.Fatal(err)
+	}
+	return set
+}
+
+func english(t testing.TB) *layout.Words {
+	t.Helper()
+	w, err := document.ReadWords(document.In(templates.Languages(), "en.yaml"))
+	if err != nil {
+		t.Fatal(err)
+	}
+	return w
+}
+
+// harbours returns the demo harbour and every file in testdata/harbours.
+func harbours(t testing.TB) map[string]*predict.Harbour {
+	t.Helper()
+	all := map[string]*predict.Harbour{}
+	demo, _, err := document.ReadHarbour(document.In(templates.Starter(), "skerrow-haven.yaml"))
+	if err != nil {
+		t.Fatal(err)
+	}
+	all["demo"] = demo
+	files, err := filepath.Glob("../testdata/harbours/*.yaml")
+	if err != nil || len(files) < 7 {
+		t.Fatalf("%d harbours, %v", len(files), err)
+	}
+	for _, f := range files {
+		h, _, err := document.ReadHarbour(document.OnDisk(f))
+		if err != nil {
+			t.Fatal(err)
+		}
+		all[strings.TrimSuffix(filepath.Base(f), ".yaml")] = h
+	}
+	return all
+}
+
+func yearOf(h *predict.Harbour, w *layout.Words, year int) *layout.Almanac {
+	return &layout.Almanac{
+		Harbours: []*predict.Harbour{h},
+		From:     calendar.Date{Year: year, Month: 1, Day: 1},
+		To:       calendar.Date{Year: year, Month: 12, Day: 31},
+		Edition:  layout.Booklet,
+		Paper:    layout.Papers()[0],
+		Words:    w,
+		Unit:     layout.Metres,
+		Decimals: 1,
+		Ink:      layout.InkSets()[0],
+		Inputs:   []layout.Input{{Name: "harbour.yaml", SHA256: strings.Repeat("0123456789abcdef", 4)}},
+	}
+}
+
+// TestPagesAreSound makes a booklet of every harbour on every paper, in both
+// units and with both clocks, and lets the page check look for text over text,
+// text outside its cell or the page, small type, faint type and missing glyphs.
+func TestPagesAreSound(t *testing.T) {
+	set, w := faces(t), english(t)
+	pages := 0
+	for name, h := range harbours(t) {
+		for _, paper := range layout.Papers() {
+			for _, unit := range []layout.Unit{layout.Metres, layout.Feet} {
+				a := yearOf(h, w, 2027)
+				a.Paper, a.Unit = paper, unit
+				a.Title = "Tides for everyone who keeps a boat at " + h.Name
+				a.Publisher = "The United Boat Clubs, Harbour Trustees and Rowing Society of the Skerrow Shore"
+				if unit == layout.Feet {
+					a.Clock = layout.Clock12
+					a.Ink = layout.InkSets()[1]
+				}
+				doc, err := layout.Make(a, set)
+				if err != nil {
+					t.Errorf("%s, %s, %s: %v", name, paper.Name, unit.Symbol, err)
+					continue
+				}
+				pages += len(doc.Pages)
+				problems := page.Check(*doc, set, page.Rules{Margin: 4, Figures: 8, Words: 6.5, Missing: set.Missing})
+				for i, p := range problems {
+					if i == 5 {
+						t.Errorf("and %d more", len(problems)-i)
+						break
+					}
+					t.Errorf("%s, %s, %s: %s", name, paper.Name, unit.Symbol, p)
+				}
+			}
+		}
+	}
+	t.Logf("%d pages", pages)
+}
+
+// TestGolden compares some pages of the demo almanac with the ones on file.
+func TestGolden(t *testing.T) {
+	set := faces(t)
+	a, _, err := document.ReadAlmanac(document.In(templates.Starter(), "almanac.yaml"), templates.Languages())
+	if err != nil {
+		t.Fatal(err)
+	}
+	doc, err := layout.Make(a, set)
+	if err != nil {
+		t.Fatal(err)
+	}
+	want := map[string]bool{
+		"cover": true, "reading": true, "skerrow-haven-fortnights-2027": true, "skerrow-haven-2027-03-tides": true,
+		"skerrow-haven-2027-03-sky": true, "skerrow-haven-2027-10-tides": true, "skerrow-haven-sources": true,
+	}
+	for _, p := range doc.Pages {
+		if want[p.Name] {
+			delete(want, p.Name)
+			pagetest.Golden(t, "testdata/"+p.Name+".txt", p)
+		}
+	}
+	for name := range want {
+		t.Errorf("no page %s", name)
+	}
+}
+
+// TestEveryTideIsPrinted reads the tides back from the pages: every turning
+// point of the year, with its time and height, in order, once.
+func TestEveryTideIsPrinted(t *testing.T) {
+	set, w := faces(t), english(t)
+	for name, h := range harbours(t) {
+		a := yearOf(h, w, 2027)
+		doc, err := layout.Make(a, set)
+		if err != nil {
+			t.Fatal(err)
+		}
+		tide, err := predict.New(h)
+		if err != nil {
+			t.Fatal(err)
+		}
+		start, end := a.From.Start(h.Zone), a.To.End(h.Zone)
+		var want []string
+		for _, turn := range tide.Turns(start, end) {
+			local := turn.Time.In(h.Zone)
+			clock := local.Add(30e9).Format("15:04")
+			if clock == "00:00" && local.Hour() == 23 {
+				clock = "24:00"
+			}
+			height := strings.Replace(fmt.Sprintf("%.1f", turn.Height), "-", "\u2212", 1)
+			if height == "\u22120.0" {
+				height = "0.0"
+			}
+			kind := "table"
+			if turn.Kind == predict.HighWater {
+				kind = "table-bold"
+			}
+			want = append(want, fmt.Sprint(clock, " ", height, " ", strings.Replace(kind, "table", "", 1)))
+		}
+		var got []string
+		for _, p := range doc.Pages {
+			if !strings.Contains(p.Name, "-tides") {
+				continue
+			}
+			var last *page.Text
+			for _, item := range p.Items {
+				text, ok := item.(page.Text)
+				if !ok {
+					continue
+				}
+				if last != nil && strings.Contains(last.S, ":") && text.Y == last.Y {
+					kind := ""
+					if text.Face == page.TableBold || text.Face == page.NarrowBold {
+						kind = "-bold"
+					}
+					got = append(got, fmt.Sprint(last.S, " ", text.S, " ", kind))
+				}
+				last = &text
+			}
+		}
+		if len(got) != len(want) {
+			t.Errorf("%s: %d tides on the pages, %d in the year", name, len(got), len(want))
+			continue
+		}
+		for i := range want {
+			if got[i] != want[i] {
+				t.Errorf("%s: tide %d is printed as %q, wanted %q", name, i, got[i], want[i])
+				break
+			}
+		}
+	}
+}
