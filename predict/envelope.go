@@ -239,10 +239,10 @@ func (d *day) partialSlope(y float64, species int) (rate, bend float64) {
 // bounds are upper bounds of the size of derivatives over a day and an hour
 // beyond, in metres and hours.
 type bounds struct {
-	third      float64 // of the third derivative
-	slowThird  float64 // of what the slow species contribute to it
-	shallow    float64 // of what the others contribute to the first
-	slow       int     // how many species are slow: up to two cycles a day
+	third     float64 // of the third derivative
+	slowThird float64 // of what the slow species contribute to it
+	shallow   float64 // of what the others contribute to the first
+	slow      int     // how many species are slow: up to two cycles a day
 }
 
 // bounds works out the bounds of the day.
