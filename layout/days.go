@@ -28,7 +28,7 @@ func (d *Day) Middle() time.Time { return d.Start.Add(d.End.Sub(d.Start) / 2) }
 // span is a harbour through a period, day by day.
 type span struct {
 	harbour   *predict.Harbour
-	tide      *predict.Tide
+	water     predict.Water
 	days      []Day
 	events    []astro.Event // of the sky, over the whole period, without rises and sets
 	low, high float64       // the lowest and highest turning points, metres
@@ -41,16 +41,16 @@ const marginDays = 8
 
 // newSpan works out every day from one date to another, both included.
 func newSpan(h *predict.Harbour, from, to calendar.Date) (*span, error) {
-	tide, err := predict.New(h)
+	water, err := predict.Open(h)
 	if err != nil {
 		return nil, err
 	}
-	s := &span{harbour: h, tide: tide}
+	s := &span{harbour: h, water: water}
 	start, end := from.Start(h.Zone), to.End(h.Zone)
 	margin := time.Duration(marginDays) * 24 * time.Hour
-	all := tide.Turns(start.Add(-margin), end.Add(margin))
+	all := water.Turns(start.Add(-margin), end.Add(margin))
 	swell := predict.NewSwell(all)
-	s.reference = referenceRange(h, tide, from)
+	s.reference = referenceRange(h, water, from)
 	sky := astro.NewAlmanac(h.Position, start, end)
 
 	next := 0
@@ -106,14 +106,14 @@ func (s *span) months() [][]Day {
 // tides of a day are unequal those say little of the range from the highest to
 // the lowest water, and it is the mean of all springs (or tropic tides) of the
 // calendar year in which the period begins.
-func referenceRange(h *predict.Harbour, tide *predict.Tide, from calendar.Date) float64 {
+func referenceRange(h *predict.Harbour, water predict.Water, from calendar.Date) float64 {
 	if h.Regime() == predict.Semidiurnal {
 		return h.SpringRange()
 	}
 	start := time.Date(from.Year, 1, 1, 0, 0, 0, 0, time.UTC)
 	margin := time.Duration(marginDays) * 24 * time.Hour
 	end := start.AddDate(1, 0, 0)
-	swell := predict.NewSwell(tide.Turns(start.Add(-margin), end.Add(margin)))
+	swell := predict.NewSwell(water.Turns(start.Add(-margin), end.Add(margin)))
 	var sum float64
 	n := 0
 	for noon := start.Add(12 * time.Hour); noon.Before(end); noon = noon.Add(24 * time.Hour) {

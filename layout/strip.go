@@ -80,7 +80,7 @@ func (b *book) hourHeadings(s *sheet, m *monthPart, strip column, y float64) {
 
 // strips draws every day of a month: night in its steps, the hours, the water.
 func (b *book) strips(s *sheet, m *monthPart, r *rows, col column) {
-	curve := m.tide.Curve()
+	curve := m.water.Curve()
 	low, high := m.low, m.high
 	if high-low < 1e-6 {
 		low, high = low-0.5, high+0.5
@@ -110,7 +110,7 @@ func (b *book) strips(s *sheet, m *monthPart, r *rows, col column) {
 // water draws the curve of one day as Bézier pieces with the true slope at
 // their ends, and breaks it where the clock leaps. X places an hour of the
 // clock, y a height in metres.
-func water(line *page.Path, curve *predict.Curve, d *Day, scale *clockScale, x, y func(float64) float64) {
+func water(line *page.Path, curve predict.Curve, d *Day, scale *clockScale, x, y func(float64) float64) {
 	const step = 0.75 // hours
 	for k := 1; k < len(scale.elapsed); k++ {
 		from, length := scale.elapsed[k-1], scale.elapsed[k]-scale.elapsed[k-1]

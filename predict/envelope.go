@@ -20,8 +20,9 @@ import (
 const (
 	dayHours      = 24.0
 	halfDay       = dayHours / 2
-	envelopeError = 1e-9 // metres
+	envelopeError = 1e-8 // metres
 	maxDegree     = 40
+	knotHours     = 2 * dayHours // how far apart node factors are worked out
 )
 
 // carrierSpeed is the speed of the carrier of species 1, radians an hour: half
@@ -81,9 +82,10 @@ type day struct {
 	envelope [][]complex128 // by species, then by power of the hours from the centre, the highest first
 	phasor   []complex128   // H exp(i(V - G)) of each part at the centre
 	turned   int            // days the phasors have been turned on since they were worked out
-	low      []nodeComplex  // node terms at the start of the day
-	high     []nodeComplex  // and at its end
-	year     int            // whose node factors low holds, in the mid-year convention
+	knot     float64        // hours: node terms are known at a knot and at the next
+	low      []nodeComplex  // node terms at the knot
+	high     []nodeComplex  // and at the next
+	year     int            // whose node factors both hold, in the mid-year convention
 }
 
 // nodeComplex is f exp(iu) of a node rule.
@@ -91,7 +93,7 @@ type nodeComplex = complex128
 
 // newDay returns an empty day to be set.
 func (t *Tide) newDay() *day {
-	d := &day{t: t, envelope: make([][]complex128, len(t.species)), centre: math.NaN()}
+	d := &day{t: t, envelope: make([][]complex128, len(t.species)), centre: math.NaN(), knot: math.NaN()}
 	for i := range d.envelope {
 		d.envelope[i] = make([]complex128, t.degrees[i]+1)
 	}
@@ -113,13 +115,15 @@ func (d *day) set(x float64) {
 	for _, e := range d.envelope {
 		clear(e)
 	}
+	past := d.centre - d.knot
 	for i := range d.t.parts {
 		p := &d.t.parts[i]
-		// Node factors run straight from the start of the day to its end: over
-		// one day that is right to 2e-6 of the least smooth of them.
+		// Node factors run straight from one knot to the next: over two days
+		// that is right to 1e-5 of the least smooth of them, that of M1.
 		low, high := d.low[p.rule], d.high[p.rule]
-		f0 := d.phasor[i] * complex((real(low)+real(high))/2, (imag(low)+imag(high))/2)
-		f1 := d.phasor[i] * complex((real(high)-real(low))/dayHours, (imag(high)-imag(low))/dayHours)
+		slope := complex((real(high)-real(low))/knotHours, (imag(high)-imag(low))/knotHours)
+		f0 := d.phasor[i] * (low + complex(real(slope)*past, imag(slope)*past))
+		f1 := d.phasor[i] * slope
 		// exp(i offset y) has the Taylor terms i^k offset^k / k! of y^k; the
 		// product with f0 + f1 y is gathered power by power. Re and im are
 		// those of i^k f0 and of i^(k-1) f1.
@@ -161,6 +165,7 @@ func (d *day) setPhasors(centre float64) {
 // setNodes brings low and high to the day that begins at start.
 func (d *day) setNodes(start float64) {
 	if d.t.convention == MidYear {
+		d.knot = start
 		if y := yearOf(start); y != d.year {
 			d.year = y
 			d.t.nodeTerms(midYear(y), d.low)
@@ -168,12 +173,17 @@ func (d *day) setNodes(start float64) {
 		}
 		return
 	}
-	if start == d.centre+halfDay { // the next day begins as this one ends
+	knot := math.Floor(start/knotHours) * knotHours
+	if knot == d.knot {
+		return
+	}
+	if knot == d.knot+knotHours {
 		d.low, d.high = d.high, d.low
 	} else {
-		d.t.nodeTerms(start, d.low)
+		d.t.nodeTerms(knot, d.low)
 	}
-	d.t.nodeTerms(start+dayHours, d.high)
+	d.t.nodeTerms(knot+knotHours, d.high)
+	d.knot = knot
 }
 
 // nodeTerms works out f exp(iu) of every rule at x hours.

@@ -165,9 +165,9 @@ func clearAhead(r, b, third float64) float64 {
 
 // solve finds the one zero of the slope from lo to hi by Newton's method held
 // inside the bracket, given the first and second derivative at lo. It returns
-// the zero and the second derivative there.
+// the zero and the second derivative near it.
 func (s *scanner) solve(lo, hi, rate, bend float64) (y, bendThere float64) {
-	const enough = 2e-6 // hours: Newton's next step would be a millionth of it
+	const enough = 3e-7 // hours, a millisecond
 	y = lo
 	for range 60 {
 		if rate >= 0 == s.rising {
@@ -181,7 +181,8 @@ func (s *scanner) solve(lo, hi, rate, bend float64) (y, bendThere float64) {
 		}
 		step := next - y
 		y = next
-		if math.Abs(step) < enough {
+		// What Newton's step leaves, by Taylor's theorem.
+		if s.bounds.third*step*step < 2*enough*math.Abs(bend) {
 			break
 		}
 		rate, bend = s.day.slope(y)
