@@ -28,12 +28,11 @@ func (a *Almanac) format(zone *time.Location) format {
 // written 24:00, on its own day.
 func (f *format) time(t time.Time) string {
 	t = t.In(f.zone)
-	rounded := t.Add(30 * time.Second).Truncate(time.Minute)
-	h, m := rounded.Hour(), rounded.Minute()
-	if h == 0 && m == 0 && t.Hour() == 23 {
-		h = 24
+	h, m := t.Hour(), t.Minute()
+	if t.Second() >= 30 {
+		m++
 	}
-	return f.hourMinute(h, m)
+	return f.hourMinute(h+m/60, m%60)
 }
 
 // hourMinute writes an hour from 0 to 24 and a minute.
