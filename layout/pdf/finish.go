@@ -25,6 +25,7 @@ func finish(file []byte, doc page.Document, sheets []sheet, opts Options) ([]byt
 		return nil, fmt.Errorf("the PDF could not be finished: %w", err)
 	}
 	root := len(offsets) - 1
+	tagSubsets(file[:offsets[root]])
 	t := &tail{out: file[:offsets[root]:offsets[root]], offsets: offsets[:root]}
 	copy(t.out, "%PDF-"+version) // as long as the header that stands there
 	where := spots(doc, sheets)
@@ -53,6 +54,28 @@ func finish(file []byte, doc page.Document, sheets []sheet, opts Options) ([]byt
 	t.printf(">>>>\nendobj\n")
 	t.end(root)
 	return t.out, nil
+}
+
+// tagSubsets marks the names of the fonts as those of subsets, with six capitals
+// and a plus sign in front [PDF 9.6.4]: fpdf cuts a face down to the characters
+// used but leaves its name as it was. The capitals are drawn from the content.
+func tagSubsets(body []byte) {
+	sum := sha256.Sum256(body)
+	tag := make([]byte, 6)
+	for i := range tag {
+		tag[i] = 'A' + sum[i]%26
+	}
+	for _, key := range []string{"/BaseFont /", "/FontName /"} {
+		stem := []byte(key + "utf8" + familyStem)
+		for rest := body; ; {
+			i := bytes.Index(rest, stem)
+			if i < 0 {
+				break
+			}
+			copy(rest[i+len(key):], append(tag[:6:6], '+'))
+			rest = rest[i+len(stem):]
+		}
+	}
 }
 
 // readOffsets reads fpdf's cross-reference table [PDF 7.5.4]: where each object

@@ -59,11 +59,14 @@ func TestFontsAreEmbedded(t *testing.T) {
 		if !f.Embedded {
 			t.Errorf("%s is not embedded", f.Name)
 		}
+		if !regexp.MustCompile(`^[A-Z]{6}$`).MatchString(f.Prefix) {
+			t.Errorf("%s is not marked as a subset", f.Name)
+		}
 		got[f.Name] = true
 	}
 	for f := range page.Face(page.Faces) {
 		used := f == page.Table || f == page.BodyBold || f == page.BodyItalic || f == page.Narrow || f == page.NarrowBold
-		name := "utf8" + strings.ToLower(strings.TrimSuffix(face.File(f), ".ttf"))
+		name := strings.ToLower(strings.TrimSuffix(face.File(f), ".ttf"))
 		if got[name] != used {
 			t.Errorf("%s in the file: %t, want %t (%v)", name, got[name], used, got)
 		}

@@ -82,12 +82,16 @@ func appendEscaped(b []byte, c byte) []byte {
 	return append(b, c)
 }
 
+// familyStem begins the name under which a face is known to fpdf, which writes
+// "utf8" before it: together they make room for a subset's tag (see tagSubsets).
+const familyStem = "cut"
+
 // font sets face and size where they are not set already.
 func (d *drawer) font(f page.Face, size float64) {
 	if d.size == size && d.face == f && d.added[f] {
 		return
 	}
-	family := strings.TrimSuffix(face.File(f), ".ttf")
+	family := familyStem + strings.TrimSuffix(face.File(f), ".ttf")
 	if !d.added[f] {
 		d.f.AddUTF8FontFromBytes(family, "", d.set.Bytes(f))
 		d.added[f] = true
