@@ -133,6 +133,24 @@ func TestChanges(t *testing.T) {
 	if got := all[0].At.UTC().Format(time.RFC3339); got != "2027-03-28T01:00:00Z" {
 		t.Errorf("forward at %s", got)
 	}
+	// Year after year by rule alone, over leap years too, in both hemispheres.
+	for _, name := range []string{"Europe/London", "Pacific/Auckland", "America/New_York"} {
+		z := zone(t, name)
+		for year := 2030; year <= 2100; year++ {
+			all := Changes(Date{year, 1, 1}.Start(z), Date{year, 12, 31}.End(z), z)
+			if len(all) != 2 || all[0].Before.Summer == all[0].After.Summer || all[1].After.Summer != all[0].Before.Summer {
+				t.Fatalf("%s in %d: %+v", name, year, all)
+			}
+			last := Date{year, 12, 31}
+			if n := len(Changes(last.Start(z), last.End(z), z)); n != 0 {
+				t.Errorf("%s, %s: %d changes", name, last, n)
+			}
+			// In both years' ends the reckoning is that of the season.
+			if r := ReckoningAt(last.End(z).Add(-time.Hour), z); r.Summer != (name == "Pacific/Auckland") {
+				t.Errorf("%s, end of %d: %+v", name, year, r)
+			}
+		}
+	}
 	// A change at the very start counts, one at the very end does not.
 	at := all[0].At
 	if n := len(Changes(at, at.Add(time.Hour), z)); n != 1 {

@@ -28,32 +28,67 @@ func ReckoningAt(t time.Time, zone *time.Location) Reckoning {
 	t = t.In(zone)
 	name, ahead := t.Zone()
 	r := Reckoning{Name: name, Ahead: time.Duration(ahead) * time.Second}
-	start, end := t.ZoneBounds()
-	if start.IsZero() || end.IsZero() {
+	// How far it is, in weeks, to another reckoning on either side.
+	const week, longest = 7 * 24 * time.Hour, 43
+	away := func(step time.Duration) (weeks int, other time.Duration, ok bool) {
+		for weeks = 1; weeks <= longest; weeks++ {
+			if other := offset(t.Add(time.Duration(weeks) * step)); other != r.Ahead {
+				return weeks, other, true
+			}
+		}
+		return 0, 0, false
+	}
+	since, before, ok := away(-week)
+	if !ok || before > r.Ahead {
 		return r
 	}
-	_, before := start.Add(-time.Second).Zone()
-	_, after := end.Zone()
-	const day = 24 * time.Hour
-	length := end.Sub(start)
-	r.Summer = ahead > before && ahead > after && (t.IsDST() || length > 100*day && length < 300*day)
+	until, after, ok := away(week)
+	if !ok || after > r.Ahead {
+		return r
+	}
+	r.Summer = t.IsDST() || since+until > 14 && since+until < longest
 	return r
+}
+
+// offset returns how far a moment's zone is ahead of UT.
+func offset(t time.Time) time.Duration {
+	_, ahead := t.Zone()
+	return time.Duration(ahead) * time.Second
 }
 
 // Changes returns the changes of the clock from one moment up to but not
 // including another. Changes of the name alone are left out.
+//
+// It looks at the clock every few hours and halves its way to the second of a
+// change: Time.ZoneBounds, which would tell, loses its way in the years after
+// 2037, which zone data give by rule alone.
 func Changes(from, to time.Time, zone *time.Location) []Change {
+	const step = 6 * time.Hour
 	var all []Change
 	// A step back first: a change at the very first moment counts.
-	for t := from.Add(-time.Nanosecond).In(zone); ; {
-		_, end := t.ZoneBounds()
-		if end.IsZero() || !end.Before(to) {
-			return all
+	for a := from.Add(-time.Second).In(zone); a.Before(to); {
+		b := a.Add(step)
+		if offset(a) == offset(b) {
+			a = b
+			continue
 		}
-		c := Change{end.In(zone), ReckoningAt(end.Add(-time.Second), zone), ReckoningAt(end, zone)}
-		if c.Before.Ahead != c.After.Ahead {
-			all = append(all, c)
+		lo, hi := a, b
+		for hi.Sub(lo) > time.Second {
+			mid := lo.Add(hi.Sub(lo) / 2).Truncate(time.Second)
+			if !mid.After(lo) {
+				break
+			}
+			if offset(mid) == offset(a) {
+				lo = mid
+			} else {
+				hi = mid
+			}
 		}
-		t = end.In(zone)
+		hi = hi.Truncate(time.Second)
+		if !hi.Before(from) && hi.Before(to) {
+			all = append(all, Change{hi, ReckoningAt(hi.Add(-time.Second), zone), ReckoningAt(hi, zone)})
+		}
+		a = hi
 	}
+	return all
 }
