@@ -16,6 +16,10 @@ type Constituent struct {
 	// relative to the general coefficient (Doodson, schedules 1 to 3), without
 	// its sign; 0 for shallow-water and seasonal terms, which have none.
 	Equilibrium float64
+	// NodeTimes is the multiple of N', the longitude of the Moon's node turned
+	// round, in the argument. It is 0 for all constituents known by name: their
+	// node rules say how the node enters.
+	NodeTimes int
 }
 
 // Species is the number of cycles a day, to the nearest: 0 for long-period
@@ -29,7 +33,7 @@ func (c Constituent) Speed() float64 {
 	for i, rate := range longitudeRates {
 		v += float64(c.Arg[i+1]) * rate
 	}
-	return v
+	return v + float64(c.NodeTimes)*nodeRate
 }
 
 // longitudeRates holds the rates of s, h, p and p1 in degrees an hour: the
@@ -42,11 +46,14 @@ var longitudeRates = [4]float64{
 	1.71946 / (36525 * 24),
 }
 
+// nodeRate is the rate of N' in degrees an hour (Meeus 47.7).
+const nodeRate = 1934.1362891 / (36525 * 24)
+
 // argument returns the equilibrium argument V in degrees, not reduced.
 func (c *Constituent) argument(at *instant) float64 {
 	l := &at.longitudes
 	return float64(c.Arg[0])*at.hourAngle + float64(c.Arg[1])*l.S + float64(c.Arg[2])*l.H +
-		float64(c.Arg[3])*l.P + float64(c.Arg[4])*l.P1 + c.Phase
+		float64(c.Arg[3])*l.P + float64(c.Arg[4])*l.P1 - float64(c.NodeTimes)*l.N + c.Phase
 }
 
 // instant holds what an equilibrium argument needs of a moment.

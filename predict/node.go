@@ -31,6 +31,7 @@ const (
 	nodeM2
 	nodeL2
 	nodeM1
+	nodeKJ2
 	nodeBases = iota
 )
 
@@ -121,6 +122,7 @@ func basicNodes(x float64) [nodeBases]nodeValue {
 	v[nodeM2] = nodeValue{cos2Half * cos2Half / 0.9154, 2*xi - 2*nu}                                           // 78
 	v[nodeK1] = nodeValue{math.Sqrt(0.8965*sin2I*sin2I + 0.6001*sin2I*cosNu + 0.1006), -nuK1}                  // 227
 	v[nodeK2] = nodeValue{math.Sqrt(19.0444*sinI*sinI*sinI*sinI + 2.7702*sinI*sinI*cos2nu + 0.0981), -twoNuK2} // 235
+	v[nodeKJ2] = nodeValue{sinI * sinI / 0.1565, -2 * nu}                                                      // 79
 
 	// L2: 213 to 215.
 	sin2P, cos2P := math.Sincos(2 * p)

@@ -21,6 +21,9 @@ func TestNodeFactorLimits(t *testing.T) {
 		{nodeK2, "K2", 0.746, 1.316},
 		{nodeMf, "Mf", 0.625, 1.452},
 		{nodeMm, "Mm", 0.872, 1.131},
+		// By hand from Schureman 79: I runs from 23.452 - 5.145 to 23.452 + 5.145
+		// degrees, sin I from 0.31411 to 0.47865.
+		{nodeKJ2, "KJ2", 0.6304, 1.4639},
 	}
 	start := hours(time.Date(2000, 1, 1, 0, 0, 0, 0, time.UTC))
 	var low, top [nodeBases]float64

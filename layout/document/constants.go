@@ -1,6 +1,7 @@
 package document
 
 import (
+	"errors"
 	"math"
 	"regexp"
 	"strconv"
@@ -75,7 +76,13 @@ func (h *harbourFile) constants(r *reader, what string, n *yaml.Node) {
 	}
 	seen := map[string]entry{}
 	for _, e := range r.entries(what, wanted, n) {
-		c, problem := constituent(e.name)
+		own := isOwn(e.value)
+		c, problem := predict.Constituent{Name: strings.ToUpper(e.name)}, ""
+		if own {
+			problem = ownNameProblem(e.name)
+		} else {
+			c, problem = constituent(e.name)
+		}
 		if problem != "" {
 			r.fault(e.key, "%s", problem)
 			continue
@@ -85,7 +92,13 @@ func (h *harbourFile) constants(r *reader, what string, n *yaml.Node) {
 			continue
 		}
 		seen[c.Name] = e
-		amplitude, lag, ok := h.pair(r, e.name, e.value)
+		var amplitude, lag float64
+		var ok bool
+		if own {
+			c, amplitude, lag, ok = h.own(r, e)
+		} else {
+			amplitude, lag, ok = h.pair(r, e.name, e.value)
+		}
 		if !ok {
 			continue
 		}
@@ -127,21 +140,27 @@ func (h *harbourFile) pair(r *reader, name string, n *yaml.Node) (amplitude, lag
 	default:
 		r.fault(n, "%s is %s: %s is wanted", name, r.kind(n), wanted)
 	}
-	ok = at.amplitude != nil && at.lag != nil
-	if at.amplitude != nil {
-		x, good := r.number("the amplitude of "+name, at.amplitude)
+	return h.numbers(r, name, at.amplitude, at.lag)
+}
+
+// numbers reads the amplitude and the phase lag of a constituent where they
+// stand; either may be missing.
+func (h *harbourFile) numbers(r *reader, name string, atAmplitude, atLag *yaml.Node) (amplitude, lag float64, ok bool) {
+	ok = atAmplitude != nil && atLag != nil
+	if atAmplitude != nil {
+		x, good := r.number("the amplitude of "+name, atAmplitude)
 		if good {
 			if problem := h.amplitudeProblem(name, x); problem != "" {
-				r.fault(at.amplitude, "%s", problem)
+				r.fault(atAmplitude, "%s", problem)
 			}
 		}
 		amplitude, ok = x, ok && good
 	}
-	if at.lag != nil {
-		x, good := r.number("the phase lag of "+name, at.lag)
+	if atLag != nil {
+		x, good := r.number("the phase lag of "+name, atLag)
 		if good {
 			if problem := lagProblem(name, x); problem != "" {
-				r.fault(at.lag, "%s", problem)
+				r.fault(atLag, "%s", problem)
 			}
 		}
 		lag, ok = x, ok && good
@@ -175,34 +194,56 @@ func lagProblem(name string, x float64) string {
 // meant, or nothing.
 func constituent(name string) (c predict.Constituent, problem string) {
 	name = tidy(name)
-	if c, ok := predict.Lookup(name); ok {
+	if problem := meanLevelProblem(name); problem != "" {
+		return c, problem
+	}
+	c, err := predict.Resolve(name)
+	switch {
+	case err == nil:
 		return c, ""
+	case !errors.Is(err, predict.ErrUnknown):
+		return c, visible(err.Error())
 	}
 	unknown := "the constituent " + quote(name) + " is not known"
-	if strings.EqualFold(name, "Z0") || strings.EqualFold(name, "A0") || strings.EqualFold(name, "S0") {
-		return c, quote(name) + " is the mean level, not a constituent: give it as mean-level"
-	}
-	// The Greek letters of Darwin's names, and names with signs in them.
-	latin := strings.NewReplacer("Μ", "MU", "Ν", "NU", "Λ", "LAM", "Ρ", "RHO").Replace(strings.ToUpper(strings.ReplaceAll(name, "µ", "μ")))
-	latin = strings.Map(func(r rune) rune {
+	// Names with signs in them.
+	letters := strings.Map(func(r rune) rune {
 		if unicode.IsLetter(r) || unicode.IsDigit(r) {
 			return r
 		}
 		return -1
-	}, latin)
-	if c, ok := predict.Lookup(latin); ok {
+	}, name)
+	if c, ok := predict.Lookup(letters); ok {
 		return c, unknown + "; did you mean " + c.Name + "?"
 	}
-	var names []string
-	for _, c := range predict.Constituents() {
-		names = append(names, c.Name)
+	// The common ones are the likelier guess.
+	near := nearby(name, constituentNames(predict.Common()))
+	if len(near) == 0 {
+		near = nearby(name, constituentNames(predict.Constituents()))
 	}
-	switch near := nearby(name, names); {
+	switch {
 	case len(near) == 0:
-		return c, unknown + ": leave it out, or see that its name is spelt as Schureman has it"
+		return c, unknown + `: the command "ebbleaf list constituents" shows those that are, and any other can be given by its extended ` +
+			"Doodson number, under the key doodson"
 	case len(near) == 1:
 		return c, unknown + "; did you mean " + near[0] + "?"
 	default:
 		return c, unknown + "; near it are " + join(near[:min(len(near), 6)], "and")
 	}
+}
+
+// meanLevelProblem tells the names of the mean level from those of
+// constituents.
+func meanLevelProblem(name string) string {
+	if strings.EqualFold(name, "Z0") || strings.EqualFold(name, "A0") || strings.EqualFold(name, "S0") {
+		return quote(name) + " is the mean level, not a constituent: give it as mean-level"
+	}
+	return ""
+}
+
+func constituentNames(all []predict.Constituent) []string {
+	var names []string
+	for _, c := range all {
+		names = append(names, c.Name)
+	}
+	return names
 }
