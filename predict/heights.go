@@ -23,6 +23,13 @@ type Curve interface {
 
 // Open makes a harbour ready for prediction.
 func Open(h *Harbour) (Water, error) {
+	if h.Reduction != nil {
+		s, err := openSecondary(h)
+		if err != nil {
+			return nil, err
+		}
+		return s, nil
+	}
 	t, err := New(h)
 	if err != nil {
 		return nil, err // not t, which is no Water where it is nil

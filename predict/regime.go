@@ -45,8 +45,13 @@ func (h *Harbour) Regime() Regime {
 
 // SpringRange returns the mean range in metres at the height of the fortnight:
 // at springs, 2 (M2 + S2), or at a harbour that follows the declination at
-// tropic tides, 2 (K1 + O1) (Pugh, section 3.2).
+// tropic tides, 2 (K1 + O1) (Pugh, section 3.2). At a secondary port it is what
+// that of the standard port is reduced to.
 func (h *Harbour) SpringRange() float64 {
+	if h.Reduction != nil {
+		high, low := h.Reduction.springs()
+		return high - low
+	}
 	if h.Regime().FollowsDeclination() {
 		return 2 * (h.amplitude("K1") + h.amplitude("O1"))
 	}
@@ -55,8 +60,12 @@ func (h *Harbour) SpringRange() float64 {
 
 // AgeOfTide returns by how many hours springs follow new and full Moon,
 // (G(S2) - G(M2)) / 1.0159 degrees an hour, and false where M2 or S2 is
-// missing. The difference of lags is taken from -180 to 180 degrees.
+// missing. The difference of lags is taken from -180 to 180 degrees. A secondary
+// port has the age of its standard port.
 func (h *Harbour) AgeOfTide() (float64, bool) {
+	if h.Reduction != nil {
+		return h.Reduction.Standard.AgeOfTide()
+	}
 	var m2, s2 *Constant
 	for i := range h.Constants {
 		switch c := &h.Constants[i]; c.Constituent.Name {

@@ -39,9 +39,12 @@ type part struct {
 }
 
 // New makes the harbour's constants ready for prediction. It reports
-// constants that are not finite, negative amplitudes and constituents that
-// come twice.
+// constants that are not finite, negative amplitudes, constituents that come
+// twice, and a secondary port, which is for Open.
 func New(h *Harbour) (*Tide, error) {
+	if h.Reduction != nil {
+		return nil, errors.New("a secondary port has no constants of its own")
+	}
 	if math.IsNaN(h.MeanLevel) || math.IsInf(h.MeanLevel, 0) {
 		return nil, errors.New("the mean level is not a finite number")
 	}
