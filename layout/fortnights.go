@@ -14,23 +14,20 @@ import (
 
 // fortnights sets the pages that list springs and neaps (tropic and equatorial
 // tides at a diurnal harbour) and the Moon's phases: one page, or for periods
-// well over a year one for each calendar year; and a page for notes where the
-// months would else begin on a right-hand page.
+// well over a year one for each calendar year.
 func (b *book) fortnights(sp *span) error {
 	const onePage = 400 // days
+	causes := predict.NewCauses(sp.harbour, sp.days[0].Start, sp.days[len(sp.days)-1].End)
 	first := 0
 	for i := range sp.days {
 		last := i+1 == len(sp.days)
 		if !last && (len(sp.days) <= onePage || sp.days[i+1].Date.Year == sp.days[i].Date.Year) {
 			continue
 		}
-		if err := b.fortnightPage(sp, sp.days[first:i+1], first == 0); err != nil {
+		if err := b.fortnightPage(sp, causes, sp.days[first:i+1], first == 0); err != nil {
 			return err
 		}
 		first = i + 1
-	}
-	if len(b.doc.Pages)%2 == 0 {
-		b.notes(fmt.Sprintf("%s-notes-%d", slug(sp.harbour.Name), len(b.doc.Pages)+1))
 	}
 	return nil
 }
@@ -41,7 +38,7 @@ type crestRow struct {
 	reasons string
 }
 
-func (b *book) fortnightPage(sp *span, days []Day, opens bool) error {
+func (b *book) fortnightPage(sp *span, causes *predict.Causes, days []Day, opens bool) error {
 	w, st, k := b.almanac.Words, b.styles, b.scale()
 	f := b.almanac.format(sp.harbour.Zone)
 	s := b.newSheet(fmt.Sprintf("%s-fortnights-%d", slug(sp.harbour.Name), days[0].Date.Year))
@@ -57,6 +54,7 @@ func (b *book) fortnightPage(sp *span, days []Day, opens bool) error {
 	s.text(area.X, y, page.Left, fit, title, area)
 	y += 4.4 * k
 	s.text(area.X, y, page.Left, b.fitLabel(s, area.W, sp.harbour.Name), sp.harbour.Name, area)
+	y = b.markBelow(s, sp.harbour, y)
 	y += 5.6 * k
 
 	var largest, smallest []crestRow
@@ -64,7 +62,7 @@ func (b *book) fortnightPage(sp *span, days []Day, opens bool) error {
 		d := &days[i]
 		switch d.Crest {
 		case predict.Largest:
-			largest = append(largest, crestRow{d, b.reasons(sp, d)})
+			largest = append(largest, crestRow{d, b.reasons(sp, causes, d)})
 		case predict.Smallest:
 			smallest = append(smallest, crestRow{d, ""})
 		}
@@ -133,36 +131,13 @@ func (b *book) crestList(s *sheet, f format, box page.Rect, pitch float64, headi
 	return y
 }
 
-// Windows within which something counts as a reason for big springs. Common
-// practice, no source: springs within two days of perigee are perigean; the
-// weeks about an equinox bring the Sun's greatest pull where tides are
-// semidiurnal.
-const (
-	perigeeReach = 2 * 24 * time.Hour
-	equinoxReach = 21 * 24 * time.Hour
-)
-
-// reasons says in a few words what makes the tide of a day big.
-func (b *book) reasons(sp *span, d *Day) string {
+// reasons says in a few words what sets the tide of a day apart from that of
+// other fortnights.
+func (b *book) reasons(sp *span, causes *predict.Causes, d *Day) string {
 	w := b.almanac.Words
 	var all []string
-	// Springs answer to where the Moon stood by the age of the tide before.
-	mid := d.Middle()
-	if age, ok := sp.harbour.AgeOfTide(); ok {
-		mid = mid.Add(-time.Duration(age * float64(time.Hour)))
-	}
-	for _, e := range sp.events {
-		away := e.Time.Sub(mid).Abs()
-		switch e.Kind {
-		case astro.Perigee:
-			if away <= perigeeReach {
-				all = append(all, w.Say("reason.perigee"))
-			}
-		case astro.MarchEquinox, astro.SeptemberEquinox:
-			if away <= equinoxReach && !sp.harbour.Regime().FollowsDeclination() {
-				all = append(all, w.Say("reason.equinox"))
-			}
-		}
+	if text := b.causes(rarer(causes.Large(d.Middle()))); text != "" {
+		all = append(all, text)
 	}
 	var highest, lowest bool
 	for _, t := range d.Turns {

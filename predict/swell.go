@@ -24,6 +24,13 @@ func NewSwell(turns []Turn) *Swell { return &Swell{turns} }
 // waters and ripples make no difference to it. It is NaN where there is no
 // tide.
 func (s *Swell) Range(about time.Time) float64 {
+	low, high := s.Waters(about)
+	return high - low
+}
+
+// Waters returns the lowest low and the highest high water of the lunar day
+// around a moment, metres above the datum; NaN where there is no tide.
+func (s *Swell) Waters(about time.Time) (low, high float64) {
 	x := hours(about)
 	// Where the tide all but stands, turning points lie days apart: look wider.
 	for reach := swellReach; reach < 20*swellReach; reach *= 2 {
@@ -40,10 +47,10 @@ func (s *Swell) Range(about time.Time) float64 {
 			}
 		}
 		if high >= low {
-			return high - low
+			return low, high
 		}
 	}
-	return math.NaN()
+	return math.NaN(), math.NaN()
 }
 
 // Crest tells what a day is in its fortnight.
@@ -60,17 +67,25 @@ const (
 // largest or the smallest range of its fortnight: of the five days before and
 // after. Of days alike the first counts.
 func (s *Swell) CrestAt(noon time.Time) Crest {
-	const reach = 5
-	here := s.Range(noon)
+	return crestOf(func(k int) float64 { return s.Range(noon.Add(time.Duration(k) * 24 * time.Hour)) })
+}
+
+// crestReach is how many days before and after a day belong to its fortnight.
+const crestReach = 5
+
+// crestOf is CrestAt for ranges that are given by the number of the day, 0 being
+// the one asked about.
+func crestOf(of func(k int) float64) Crest {
+	here := of(0)
 	if math.IsNaN(here) {
 		return Between
 	}
 	largest, smallest := true, true
-	for k := -reach; k <= reach; k++ {
+	for k := -crestReach; k <= crestReach && (largest || smallest); k++ {
 		if k == 0 {
 			continue
 		}
-		there := s.Range(noon.Add(time.Duration(k) * 24 * time.Hour))
+		there := of(k)
 		if there > here || k < 0 && there == here {
 			largest = false
 		}
