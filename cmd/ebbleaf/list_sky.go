@@ -2,6 +2,7 @@ package main
 
 import (
 	"math"
+	"slices"
 
 	"github.com/spf13/cobra"
 
@@ -23,12 +24,34 @@ In CSV the columns are time, event and value: kilometres for perigee and apogee,
 degrees for the Moon's declination, astronomical units for perihelion and
 aphelion, the magnitude for eclipses, and nothing for the rest.
 
-An eclipse is listed wherever on Earth it is seen: whether it is seen from the
-harbour the list does not tell.
+Each day has values of its own besides. They end the day in the text, stand in
+the list "days" in JSON, and are rows of the CSV with --daily:
+  day-length        hours with any of the Sun above the sea horizon in the day
+  sun-declination   degrees, apparent, north positive
+  sun-distance      astronomical units from the centre of the Earth
+  moon-age          days since the last new Moon
+  moon-lit          lit fraction of the disc, 0 to 1
+  moon-bright-limb  where the middle of the lit edge is, as seen from the harbour by
+                    someone facing the Moon: degrees from the top of the disc,
+                    anticlockwise (90 left, 180 below, 270 right)
+  moon-declination  degrees, apparent, north positive
+  moon-distance     kilometres between the centres
+Those of the Sun hold for the middle of the day, and the day length bears that
+time too; those of the Moon hold for its (first) transit of the day or, on a day
+without one, for the middle of the day. JSON also names the lit side (right, left,
+above or below; null where the Moon stays down or is 0 or 100 per cent lit) and the
+states of a day: above-all-day, below-all-day or crosses; for a twilight,
+above-all-day is a Sun that never sinks below its 6 or 12 degrees.
+
+An eclipse is listed wherever on Earth it is seen. Text, JSON and calendar tell
+its gamma (least distance of the shadow's axis from the centre of the Earth, or of
+the Moon from the axis of the Earth's shadow, in Earth radii, north positive) and
+whether it can be seen from the harbour, the weather apart; for the Sun also the
+greatest magnitude there (covered part of its diameter) and when. CSV does not.
 ` + spanHelp,
 		Example: `  ebbleaf list sky skerrow-haven.yaml
   ebbleaf list sky skerrow-haven.yaml --from 2027-06-21 --to 2027-06-21
-  ebbleaf list sky skerrow-haven.yaml --format csv > sky.csv`,
+  ebbleaf list sky skerrow-haven.yaml --format csv --daily > sky.csv`,
 		Args: exactly(1, "a harbour file"),
 	}
 	f := newListFlags(cmd)
@@ -37,35 +60,52 @@ harbour the list does not tell.
 	for _, name := range []string{"unit", "digits"} {
 		cmd.Flags().Lookup(name).Hidden = true
 	}
+	daily := cmd.Flags().Bool("daily", false, "in CSV, rows for the daily values too")
 	cmd.RunE = func(cmd *cobra.Command, args []string) error {
+		if *daily && f.format.value == "ics" {
+			return badUsage(cmd, "daily values are no events of a calendar: --daily is for --format csv")
+		}
 		j, err := p.job(cmd, f, args[0])
 		if err != nil {
 			return err
 		}
-		return p.listTable(j, skyTable(j))
+		return p.listTable(j, skyTable(j, *daily && j.format == "csv"))
 	}
 	return cmd
 }
 
-// skyTable returns the table of what Sun and Moon do.
-func skyTable(j *job) *table {
+// skyTable returns the table of what Sun and Moon do, with rows for the daily
+// values or without.
+func skyTable(j *job, dailyRows bool) *table {
 	almanac := astro.NewAlmanac(j.harbour.Position, j.start().Add(-halfSecond), j.end().Add(-halfSecond))
 	return &table{
 		name:    "sky",
 		title:   "Sun and Moon",
 		columns: []string{"time", "event", "value"},
 		caution: skyCaution,
+		note:    skyNote,
 		day: func(day civilDay) daily {
-			if !day.start.Before(day.end) {
+			s := skyOf(almanac, j, day)
+			if s == nil {
 				return daily{}
 			}
-			sky := almanac.Day(day.start.Add(-halfSecond), day.end.Add(-halfSecond))
-			d := daily{remarks: skyRemarks(&sky)}
-			for _, e := range sky.Events {
+			d := daily{remarks: append(skyRemarks(s.sky), s.lines()...)}
+			for _, e := range s.sky.Events {
 				value, unit := skyValue(e)
-				d.rows = append(d.rows, row{e.Time, e.Kind.String(), value, unit})
+				d.rows = append(d.rows, row{e.Time, e.Kind.String(), value, unit, j.eclipse(e, day.date)})
+			}
+			if dailyRows {
+				d.rows = append(d.rows, s.rows()...)
+				slices.SortStableFunc(d.rows, func(x, y row) int { return x.at.Compare(y.at) })
 			}
 			return d
+		},
+		member: func(day civilDay) any {
+			s := skyOf(almanac, j, day)
+			if s == nil {
+				return nil
+			}
+			return s.member()
 		},
 	}
 }
@@ -103,13 +143,20 @@ func skyRemarks(d *astro.Day) []string {
 		}
 	}
 	body("Sun", d.Sun.State, "sunrise", "sunset", len(d.Sun.Rise), len(d.Sun.Set))
-	if d.Sun.State != astro.AboveAllDay {
-		switch {
-		case d.Sun.CivilState == astro.AboveAllDay:
-			all = append(all, "civil twilight all night")
-		case d.Sun.NauticalState == astro.AboveAllDay:
-			all = append(all, "nautical twilight all night")
-		}
+	night := " all night"
+	if d.Sun.State == astro.BelowAllDay {
+		night = " all day"
+	}
+	switch s := &d.Sun; {
+	case s.State == astro.AboveAllDay:
+	case s.CivilState == astro.AboveAllDay:
+		all = append(all, "civil twilight"+night)
+	case s.NauticalState == astro.AboveAllDay:
+		all = append(all, "nautical twilight"+night)
+	case s.NauticalState == astro.BelowAllDay:
+		all = append(all, "neither civil nor nautical twilight")
+	case s.CivilState == astro.BelowAllDay:
+		all = append(all, "no civil twilight")
 	}
 	body("Moon", d.Moon.State, "moonrise", "moonset", len(d.Moon.Rise), len(d.Moon.Set))
 	return all
