@@ -20,7 +20,7 @@ type book struct {
 //
 //	cover │ how to read it, cautions
 //	then for each harbour
-//	springs, neaps and Moon │ each month: tides (left), sky (right) │ sources
+//	springs, neaps and Moon │ level staff │ highest and lowest tides │ each month: tides (left), sky (right) │ tidal windows │ sources
 //
 // It reports a harbour whose constants cannot be used, and matter that does
 // not fit its page, with what to change.
@@ -53,7 +53,14 @@ func Make(a *Almanac, m page.Measurer) (*page.Document, error) {
 		if err := b.fortnights(s); err != nil {
 			return nil, err
 		}
+		if err := b.levels(s); err != nil {
+			return nil, err
+		}
+		b.toLeft(s) // month spreads begin on a left-hand page
 		if err := b.monthSpreads(s); err != nil {
+			return nil, err
+		}
+		if err := b.windows(s); err != nil {
 			return nil, err
 		}
 		if err := b.sources(s); err != nil {

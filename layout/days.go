@@ -30,9 +30,10 @@ type span struct {
 	harbour   *predict.Harbour
 	water     predict.Water
 	days      []Day
-	events    []astro.Event // of the sky, over the whole period, without rises and sets
-	low, high float64       // the lowest and highest turning points, metres
-	reference float64       // the range that counts as 1 in the shares, metres
+	events    []astro.Event      // of the sky, over the whole period, without rises and sets
+	windows   [][]predict.Window // of each of the harbour's places
+	low, high float64            // the lowest and highest turning points, metres
+	reference float64            // the range that counts as 1 in the shares, metres
 }
 
 // marginDays is how far beyond the period tides are worked out, so that the
@@ -50,6 +51,7 @@ func newSpan(h *predict.Harbour, from, to calendar.Date) (*span, error) {
 	margin := time.Duration(marginDays) * 24 * time.Hour
 	all := water.Turns(start.Add(-margin), end.Add(margin))
 	swell := predict.NewSwell(all)
+	all = predict.WithoutRipples(all, h.SmallestRise)
 	s.reference = referenceRange(h, water, from)
 	sky := astro.NewAlmanac(h.Position, start, end)
 
@@ -74,6 +76,7 @@ func newSpan(h *predict.Harbour, from, to calendar.Date) (*span, error) {
 		d.Changes = calendar.Changes(d.Start, d.End, h.Zone)
 		s.days = append(s.days, d)
 	}
+	s.windows = windowsOf(h, water, s.days)
 	s.low, s.high = h.MeanLevel, h.MeanLevel
 	for i := range s.days {
 		for _, t := range s.days[i].Turns {
@@ -105,9 +108,10 @@ func (s *span) months() [][]Day {
 // Where the tide is semidiurnal it comes from the constants. Where the two
 // tides of a day are unequal those say little of the range from the highest to
 // the lowest water, and it is the mean of all springs (or tropic tides) of the
-// calendar year in which the period begins.
+// calendar year in which the period begins. So it is at a secondary port, which has
+// no constants.
 func referenceRange(h *predict.Harbour, water predict.Water, from calendar.Date) float64 {
-	if h.Regime() == predict.Semidiurnal {
+	if h.Regime() == predict.Semidiurnal && h.Reduction == nil {
 		return h.SpringRange()
 	}
 	start := time.Date(from.Year, 1, 1, 0, 0, 0, 0, time.UTC)

@@ -159,8 +159,11 @@ func (b *book) monthHead(s *sheet, m *monthPart) float64 {
 		y = max(y, line)
 		line += name.style.leading()
 	}
-	y += 4.4 * k
+	y = b.markReduced(s, m.harbour, outer, outerAlign, y+4.4*k)
 	said := w.Say("month-head.units", "unit", w.Say("unit."+b.almanac.Unit.Symbol), "datum", m.harbour.Datum)
+	if rise := m.f.ripple(m.harbour); rise != "" {
+		said = w.Say("month-head.ripple", "units", said, "rise", rise, "unit", m.f.unit.Symbol)
+	}
 	zone := w.Say("month-head.zone", "zone", m.zoneLine(w))
 	one := w.Say("month-head.both", "zone", zone, "units", said)
 	if s.width(st.label, one) <= s.area.W {
@@ -231,6 +234,7 @@ func (b *book) tidesPage(s *sheet, m *monthPart, r *rows, headings float64) {
 			s.text(x+c.time, base, page.Right, ts, m.f.time(t.Time), cell)
 			s.text(x+c.time+c.gap+c.height, base, page.Right, hs, m.f.height(t.Height), cell)
 		}
+		b.setMissing(s, m, r, i)
 		for n, text := range r.remarks[i] {
 			fit, _ := s.shrink(st.note, 6.5, s.area.Right()-c.date.X, text)
 			s.text(c.date.X, r.remarkBaseline(i, n, k), page.Left, fit, text, s.area)

@@ -35,7 +35,8 @@ func english(t testing.TB) *layout.Words {
 	return w
 }
 
-// harbours returns the demo harbour and every file in testdata/harbours.
+// harbours returns the demo harbour, its neighbours and every file in
+// testdata/harbours.
 func harbours(t testing.TB) map[string]*predict.Harbour {
 	t.Helper()
 	all := map[string]*predict.Harbour{}
@@ -54,6 +55,13 @@ func harbours(t testing.TB) map[string]*predict.Harbour {
 			t.Fatal(err)
 		}
 		all[strings.TrimSuffix(filepath.Base(f), ".yaml")] = h
+	}
+	for _, neighbour := range []string{"skerrow-pool", "gull-rock"} {
+		h, _, err := document.ReadHarbour(document.In(templates.Starter(), neighbour+".yaml"))
+		if err != nil {
+			t.Fatal(err)
+		}
+		all[neighbour] = h
 	}
 	return all
 }
@@ -124,6 +132,8 @@ func TestGolden(t *testing.T) {
 	want := map[string]bool{
 		"cover": true, "reading": true, "skerrow-haven-fortnights-2027": true, "skerrow-haven-2027-03-tides": true,
 		"skerrow-haven-2027-03-sky": true, "skerrow-haven-2027-10-tides": true, "skerrow-haven-sources": true,
+		"skerrow-haven-levels": true, "skerrow-haven-extremes": true,
+		"skerrow-haven-2027-03-windows": true, "skerrow-haven-2027-03-windows-b": true,
 	}
 	for _, p := range doc.Pages {
 		if want[p.Name] {
@@ -146,7 +156,7 @@ func TestEveryTideIsPrinted(t *testing.T) {
 		if err != nil {
 			t.Fatal(err)
 		}
-		tide, err := predict.New(h)
+		tide, err := predict.Open(h)
 		if err != nil {
 			t.Fatal(err)
 		}

@@ -59,7 +59,7 @@ func (b *book) reading(sp *span) error {
 	explain(7*k, func(box page.Rect) {
 		b.sampleStrip(s, sp, sample, page.Rect{X: box.X, Y: box.Y + 0.8*k, W: box.W, H: 5.2 * k})
 	},
-		w.Say("reading.strip"))
+		w.Say("reading.strip")+b.barExplained(sp))
 	explain(lineHeight, func(box page.Rect) {
 		for i, lit := range []float64{0.04, 0.3, 0.5, 0.8, 1} {
 			tilt := sampleTilt(sp, true)
@@ -70,6 +70,9 @@ func (b *book) reading(sp *span) error {
 	explain(lineHeight, func(box page.Rect) {
 		centred(box, st.strong, w.Say("weekday.short.6")+"  "+fmt.Sprint(sample.Date.Day))
 	}, w.Say("reading.weekend"))
+	for _, trait := range b.traits(sp) {
+		y = s.paragraph(page.Rect{X: area.X, Y: y, W: area.W}, st.body, trait) + 0.8*k
+	}
 	y = s.paragraph(page.Rect{X: area.X, Y: y, W: area.W}, st.body, w.Say("reading.time", "zone", sp.harbour.Zone.String())) + 3*k
 
 	// The cautions stand in a frame.
@@ -100,6 +103,9 @@ func (b *book) cautions(sp *span) []string {
 	var all []string
 	for i := range 6 {
 		all = append(all, b.almanac.Words.Say(fmt.Sprint("caution.full.", i), "datum", sp.harbour.Datum))
+	}
+	for _, h := range b.almanac.Harbours {
+		all = append(all, b.reducedCautions(h)...)
 	}
 	return append(all, b.almanac.Cautions...)
 }

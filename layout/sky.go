@@ -22,6 +22,7 @@ func (b *book) skyPage(s *sheet, m *monthPart, r *rows, headings float64) {
 	strip := column{date.Right() + 1*k, sunrise.X - date.Right() - 1.6*k}
 
 	b.hourHeadings(s, m, strip, headings)
+	b.barName(s, m, strip, headings-b.styles.label.leading())
 	for _, h := range []struct {
 		col column
 		key string

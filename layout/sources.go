@@ -36,20 +36,34 @@ func (b *book) sources(sp *span) error {
 		y = s.paragraph(page.Rect{X: area.X + label, Y: y, W: area.W - label}, st.body, fact[1]) + 0.7*k
 	}
 	y += 2 * k
-	if y+24*k > limit {
+	if y+24*k > limit && h.Reduction == nil || y > limit {
 		return fmt.Errorf("%s: the sources are too long for a page of %s: shorten source, licence or accuracy in the harbour file", h.Name, b.almanac.Paper.Name)
 	}
 
+	next := func() {
+		b.finish(s)
+		s = b.newSheet(fmt.Sprintf("%s-%d", name, len(b.doc.Pages)+1))
+		limit = b.foot(s)
+		y = s.area.Y + st.heading.ascent()
+	}
 	constants := h.Constants
+	if h.Reduction != nil {
+		rows := b.correctionRows(h, f)
+		if y+b.correctionsHeight(rows) > limit {
+			next()
+		}
+		y = b.correctionsTable(s, h, rows, y)
+		if y+24*k > limit {
+			next()
+		}
+		constants = h.Reduction.Standard.Constants
+	}
 	for {
 		constants, y = b.constantsTable(s, f, h, constants, y, limit)
 		if len(constants) == 0 {
 			break
 		}
-		b.finish(s)
-		s = b.newSheet(fmt.Sprintf("%s-%d", name, len(b.doc.Pages)+1))
-		limit = b.foot(s)
-		y = s.area.Y + st.heading.ascent()
+		next()
 	}
 	b.finish(s)
 	return nil
@@ -65,17 +79,21 @@ func (b *book) facts(sp *span, f format) [][2]string {
 		}
 	}
 	add("harbour", w.Say("sources.place", "harbour", h.Name, "position", f.position(h.Position.Lat.Degrees(), h.Position.Lon.Degrees()), "zone", h.Zone))
-	add("constants-from", h.Source)
-	add("licence", h.Licence)
-	add("accuracy", h.Accuracy)
-	mean := f
-	mean.decimals = 2
-	add("level", w.Say("sources.mean-level", "height", mean.height(h.MeanLevel), "unit", f.unit.Symbol, "datum", h.Datum))
-	method := "sources.daily"
-	if h.NodeFactors == predict.MidYear {
-		method = "sources.mid-year"
+	if h.Reduction != nil {
+		all = append(all, b.reducedFacts(h, f)...)
+	} else {
+		add("constants-from", h.Source)
+		add("licence", h.Licence)
+		add("accuracy", h.Accuracy)
+		mean := f
+		mean.decimals = 2
+		add("level", w.Say("sources.mean-level", "height", mean.height(h.MeanLevel), "unit", f.unit.Symbol, "datum", h.Datum))
+		method := "sources.daily"
+		if h.NodeFactors == predict.MidYear {
+			method = "sources.mid-year"
+		}
+		add("tides", w.Say("sources.method", "count", len(h.Constants), "nodes", w.Say(method)))
 	}
-	add("tides", w.Say("sources.method", "count", len(h.Constants), "nodes", w.Say(method)))
 	if age, ok := h.AgeOfTide(); ok && !h.Regime().FollowsDeclination() {
 		add("kind", w.Say("sources.kind-age", "kind", w.Say("regime."+strconv.Itoa(int(h.Regime()))), "form", f.number(h.FormFactor(), 2), "age", f.number(age, 0)))
 	} else {
@@ -104,6 +122,9 @@ func (b *book) constantsTable(s *sheet, f format, h *predict.Harbour, list []pre
 	pitch := 3.7 * k
 	y += st.head.capHeight()
 	heading := w.Say("sources.table", "unit", f.unit.Symbol)
+	if h.Reduction != nil {
+		heading = w.Say("secondary.constants", "unit", f.unit.Symbol)
+	}
 	fit, _ := s.shrink(st.head, 7, s.area.W, heading)
 	s.text(s.area.X, y, page.Left, fit, heading, s.area)
 	y += 4.2 * k

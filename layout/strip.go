@@ -97,13 +97,14 @@ func (b *book) strips(s *sheet, m *monthPart, r *rows, col column) {
 		for h := 0; h <= 24; h += 6 {
 			s.put(page.Rule(x(float64(h)), box.Y, x(float64(h)), box.Bottom(), hairline, page.Grey(0.45)))
 		}
-		pad := box.H * 0.07
+		pad, foot := box.H*0.07, box.Bottom()-m.barRoom(b.scale())
 		y := func(h float64) float64 {
-			return box.Bottom() - pad - (h-low)/(high-low)*(box.H-2*pad)
+			return foot - pad - (h-low)/(high-low)*(foot-box.Y-2*pad)
 		}
 		line := page.Path{Stroke: &s.ink.Accent, Weight: curved, Round: true, Role: "water"}
 		water(&line, curve, d, &scale, x, y)
 		s.put(line)
+		b.bar(s, m, d, &scale, box.Bottom(), x)
 	}
 }
 

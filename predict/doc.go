@@ -5,6 +5,9 @@
 //	                      ──Turns────► high and low waters
 //	                                       └─Fortnight─► springs and neaps
 //
+// A secondary port has a Reduction in place of constants: its high and low waters
+// are those of a standard port, corrected by a table. Open takes either kind.
+//
 // Heights are metres above the harbour's datum, phase lags are degrees on the
 // Greenwich equilibrium argument, times are UT (UT1 and UTC are within a
 // second of each other and are taken as one). Predictions are meant for the
@@ -19,5 +22,7 @@
 //   - Doodson: A. T. Doodson, The harmonic development of the tide-generating
 //     potential, Proc. R. Soc. A 100 (1921).
 //   - Pugh: D. Pugh and P. Woodworth, Sea-Level Science, Cambridge 2014.
+//   - NOS 1: US National Ocean Service, Tidal Datums and Their Applications,
+//     Special Publication NOS CO-OPS 1, 2001; from memory.
 //   - Meeus: J. Meeus, Astronomical Algorithms, 2nd edition, 1998.
 package predict

@@ -24,9 +24,20 @@ type Harbour struct {
 	MeanLevel   float64
 	NodeFactors NodeFactors
 	Constants   []Constant
-	Source      string // who worked out the constants, from what, when
-	Licence     string // terms on which the constants may be used; may be empty
-	Accuracy    string // what is known of how good the predictions are; may be empty
+	// Reduction makes the harbour a secondary port: its tide comes from a standard
+	// port. It has no constants and no node factors then, and Reduction.Middle for
+	// a mean level.
+	Reduction *Reduction
+	// SmallestRise is the rise or fall in metres under which a pair of turning
+	// points is a ripple that tables leave out; 0 for none.
+	SmallestRise float64
+	Source       string // who worked out the constants, from what, when
+	Licence      string // terms on which the constants may be used; may be empty
+	Accuracy     string // what is known of how good the predictions are; may be empty
+	// Given are the levels an authority has published for it; nil for none.
+	Given *GivenLevels
+	// Places are those with tidal windows, in the order of the file.
+	Places []Place
 }
 
 // Constant is a pair of harmonic constants.
@@ -37,8 +48,11 @@ type Constant struct {
 }
 
 // amplitude returns H of the named constituent in metres, 0 where the harbour
-// has none.
+// has none; for a secondary port that of its standard port.
 func (h *Harbour) amplitude(name string) float64 {
+	if h.Reduction != nil {
+		return h.Reduction.Standard.amplitude(name)
+	}
 	for _, c := range h.Constants {
 		if c.Constituent.Name == name {
 			return c.Amplitude

@@ -38,7 +38,8 @@ func (t *Tide) Turns(from, to time.Time) []Turn {
 	if !(x0 < x1) || len(t.parts) == 0 {
 		return nil
 	}
-	s := scanner{day: t.newDay()}
+	// Four turning points a day are usual; more make the list grow.
+	s := scanner{day: t.newDay(), found: make([]found, 0, int((x1-x0)/dayHours*4.2)+8)}
 	// A margin on both sides lets a joint at the very bounds see its neighbours.
 	s.run(x0-2*jointReach, x1+2*jointReach)
 	found := mend(s.found)
@@ -193,8 +194,9 @@ func (s *scanner) solve(lo, hi, rate, bend float64) (y, bendThere float64) {
 // mend takes out what the joint of two days' curves makes up. Where a turning
 // point lies on both sides of a joint, the sequence there reads high, low (at
 // the joint), high within minutes: it is one high water, the higher of them.
+// The list is used again.
 func mend(in []found) []found {
-	var out []found
+	out := in[:0]
 	for i := 0; i < len(in); i++ {
 		f := in[i]
 		n := len(out)

@@ -31,7 +31,7 @@ func TestStarterFiles(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	if got := strings.Join(names, " "); got != "NOTES.md almanac.yaml skerrow-haven.yaml" {
+	if got := strings.Join(names, " "); got != "NOTES.md almanac.yaml gull-rock.yaml skerrow-haven.yaml skerrow-pool.yaml" {
 		t.Errorf("files: %s", got)
 	}
 }

@@ -34,7 +34,7 @@ func TestStart(t *testing.T) {
 	if o.out != "" || !strings.Contains(o.err, "ebbleaf press "+filepath.Join(dir, "almanac.yaml")) || !strings.Contains(o.err, "invented") {
 		t.Errorf("start said %q, wrote %q to standard output", o.err, o.out)
 	}
-	if got := folder(t, dir); got != "NOTES.md almanac.yaml skerrow-haven.yaml" {
+	if got := folder(t, dir); got != "NOTES.md almanac.yaml gull-rock.yaml skerrow-haven.yaml skerrow-pool.yaml" {
 		t.Errorf("the starter folder holds %s", got)
 	}
 	want, _ := fs.ReadFile(templates.Starter(), "almanac.yaml")

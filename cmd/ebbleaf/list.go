@@ -25,7 +25,7 @@ file (ICS) for other programs.`,
   ebbleaf list heights skerrow-haven.yaml --step 10m --from 2027-04-01 --to 2027-04-01
   ebbleaf list sky skerrow-haven.yaml --format ics --from 2027-01-01 --to 2027-12-31 > sky.ics`,
 	})
-	cmd.AddCommand(p.listTides(), p.listHeights(), p.listSky())
+	cmd.AddCommand(p.listTides(), p.listHeights(), p.listSky(), p.listExtremes(), p.listWindows(), p.listConstituents())
 	return cmd
 }
 
@@ -69,7 +69,7 @@ func newListFlags(cmd *cobra.Command) *listFlags {
 // job is a list to be made.
 type job struct {
 	harbour  *predict.Harbour
-	tide     *predict.Tide
+	tide     predict.Water
 	from, to calendar.Date
 	zone     *time.Location
 	unit     layout.Unit
@@ -89,7 +89,7 @@ func (p *program) job(cmd *cobra.Command, f *listFlags, name string) (*job, erro
 		return nil, err
 	}
 	j := &job{harbour: h, zone: h.Zone, unit: layout.Metres, digits: f.digits.value, format: f.format.value, stamp: p.now()}
-	if j.tide, err = predict.New(h); err != nil {
+	if j.tide, err = predict.Open(h); err != nil {
 		return nil, fmt.Errorf("%s: %w", name, err)
 	}
 	if f.zone.value == "utc" {
@@ -113,6 +113,10 @@ func (p *program) job(cmd *cobra.Command, f *listFlags, name string) (*job, erro
 			return nil, badUsage(cmd, "--to is %s, which is past: give the first day too, with --from", j.to)
 		}
 		return nil, badUsage(cmd, "--to is %s, before --from, %s", j.to, j.from)
+	}
+	// The text says so itself; Sun and Moon are not reduced.
+	if mark := reduced(h); mark != "" && j.format != "text" && cmd.Name() != "sky" {
+		p.say("%s", mark)
 	}
 	return j, nil
 }

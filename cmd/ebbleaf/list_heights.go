@@ -52,7 +52,7 @@ func heightsTable(j *job, each time.Duration) *table {
 		day: func(day civilDay) daily {
 			var d daily
 			for ; next.Before(day.end); next = next.Add(each) {
-				d.rows = append(d.rows, row{next, "", j.height(curve.Height(next)), j.unit.Symbol})
+				d.rows = append(d.rows, row{at: next, value: j.height(curve.Height(next)), unit: j.unit.Symbol})
 			}
 			return d
 		},

@@ -42,7 +42,7 @@ func tidesTable(j *job) *table {
 		day: func(day civilDay) daily {
 			var d daily
 			for len(turns) > 0 && turns[0].Time.Before(day.end.Add(-halfSecond)) {
-				d.rows = append(d.rows, row{turns[0].Time, turns[0].Kind.String(), j.height(turns[0].Height), j.unit.Symbol})
+				d.rows = append(d.rows, row{at: turns[0].Time, word: turns[0].Kind.String(), value: j.height(turns[0].Height), unit: j.unit.Symbol})
 				turns = turns[1:]
 			}
 			if len(d.rows) == 0 {

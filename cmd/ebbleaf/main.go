@@ -6,7 +6,8 @@
 //	             ├─ press          document ──► layout ──► pdf ──► output
 //	             └─ list ─┬─ tides    ┐
 //	                      ├─ heights  ├─ a harbour's rows ──► text, csv, json, ics
-//	                      └─ sky      ┘
+//	                      ├─ sky      │
+//	                      └─ windows  ┘
 //
 // Data go to standard output, what is said to a person to standard error. The
 // exit status is one of the constants in run.go.

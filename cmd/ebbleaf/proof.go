@@ -94,12 +94,28 @@ func (p *program) proofFile(name string) (facts, error) {
 			return nil, err
 		}
 		f.harbour(h)
+		f.windows(h)
+		from, to := p.comingYear(h.Zone)
+		if err := p.doubtWindows(name, h, from, to); err != nil {
+			return nil, err
+		}
+		if err := p.doubtLevels(name, h, p.now().Year()); err != nil {
+			return nil, err
+		}
 	case document.AlmanacFile:
 		a, err := p.almanac(file)
 		if err != nil {
 			return nil, err
 		}
 		f.almanac(a)
+		for _, h := range a.Harbours {
+			if err := p.doubtWindows(name, h, a.From, a.To); err != nil {
+				return nil, err
+			}
+			if err := p.doubtLevels(name, h, a.From.Year); err != nil {
+				return nil, err
+			}
+		}
 		made, err := typeset(a)
 		if err != nil {
 			return f, document.Faults{{File: name, Message: err.Error()}}

@@ -22,9 +22,16 @@ func (f *facts) harbour(h *predict.Harbour) {
 	f.add("harbour", "%s", h.Name)
 	f.add("position", "%s", position(h))
 	f.add("time zone", "%s", h.Zone)
-	f.add("mean level", "%s above %s", length(h.MeanLevel), h.Datum)
-	f.add("constituents", "%d%s", len(h.Constants), largest(h, length))
-	f.add("node factors", "%s", h.NodeFactors)
+	from := "from the constants"
+	if h.Reduction != nil {
+		f.add("datum", "%s", h.Datum)
+		f.reduction(h, unit)
+		from = "reduced"
+	} else {
+		f.add("mean level", "%s above %s", length(h.MeanLevel), h.Datum)
+		f.add("constituents", "%d%s", len(h.Constants), largest(h, length))
+		f.add("node factors", "%s", h.NodeFactors)
+	}
 	if form := h.FormFactor(); !math.IsNaN(form) && !math.IsInf(form, 0) {
 		f.add("tide", "%s; form factor %.2f", h.Regime(), form)
 	} else {
@@ -34,7 +41,7 @@ func (f *facts) harbour(h *predict.Harbour) {
 	if h.Regime().FollowsDeclination() {
 		when = "tropic tides"
 	}
-	f.add("range", "%s at %s, from the constants", length(h.SpringRange()), when)
+	f.add("range", "%s at %s, %s", length(h.SpringRange()), when, from)
 	f.add("source", "%s", h.Source)
 	for _, more := range [][2]string{{"licence", h.Licence}, {"accuracy", h.Accuracy}} {
 		if more[1] != "" {

@@ -37,7 +37,7 @@ lies and holds its constants; an almanac file says what to print. Start with
 	root.SetFlagErrorFunc(flagFault)
 	root.SetVersionTemplate("{{.Name}} {{.Version}}\n")
 	root.SetHelpCommand(helpCommand(root))
-	root.AddCommand(p.start(), p.proof(), p.press(), p.list())
+	root.AddCommand(p.start(), p.proof(), p.press(), p.list(), p.levels(), p.seek())
 	return root
 }
 

@@ -18,7 +18,9 @@ type table struct {
 	columns []string // their names; the first is the time
 	heights bool     // the values are heights, above a datum
 	caution string
+	note    string               // stands under the text; empty for none
 	day     func(civilDay) daily // to be called for one day after another
+	member  func(civilDay) any   // a day of the list "days" in JSON, nil to leave it out; nil without that list
 }
 
 // civilDay is a day of the list: start <= t < end.
@@ -39,6 +41,13 @@ type row struct {
 	word  string    // HW, LW or an event; empty in a list of heights
 	value string    // a number as it is printed; empty for none
 	unit  string    // of the value
+	more  *detail   // what else there is to say of it; nil for nothing
+}
+
+// detail is what a row has to say besides its value.
+type detail struct {
+	lines  []string // for the text and for a calendar
+	member any      // "eclipse" in JSON
 }
 
 // days returns the days of a job, one after another. Dates that the zone left

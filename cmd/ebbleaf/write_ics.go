@@ -48,7 +48,11 @@ func (j *job) event(t *table, r row, place string) *ics.VEvent {
 	e.SetDtStampTime(j.stamp)
 	e.SetStartAt(at)
 	e.SetSummary(summary(t, r) + ", " + j.harbour.Name)
-	e.SetDescription(description(j, t))
+	about := description(j, t)
+	if r.more != nil {
+		about = strings.Join(r.more.lines, "\n") + "\n" + about
+	}
+	e.SetDescription(about)
 	e.SetLocation(j.harbour.Name)
 	e.SetGeo(number(j.harbour.Position.Lat.Degrees(), 6), number(j.harbour.Position.Lon.Degrees(), 6))
 	e.SetTimeTransparency(ics.TransparencyTransparent) // nobody is busy by it
@@ -77,7 +81,11 @@ func description(j *job, t *table) string {
 	if !t.heights {
 		return t.caution
 	}
-	return fmt.Sprintf("Heights in %s above %s. %s\nConstants: %s", j.unit.Symbol, j.harbour.Datum, t.caution, j.harbour.Source)
+	mark := reduced(j.harbour)
+	if mark != "" {
+		mark += " "
+	}
+	return fmt.Sprintf("Heights in %s above %s. %s%s\n%s", j.unit.Symbol, j.harbour.Datum, mark, t.caution, tideSource(j.harbour))
 }
 
 // placeID tells harbours apart in the names of events.

@@ -23,13 +23,19 @@ func writeText(w *bufio.Writer, j *job, t *table) error {
 	} else {
 		fmt.Fprintf(w, "Times by the clock of %s.\n", j.zoneName())
 	}
+	if mark := reduced(j.harbour); mark != "" && t.heights {
+		fmt.Fprintf(w, "%s\n", wrap(mark, textWidth))
+	}
 	for day := range j.days() {
 		if err := writeDay(w, j, t, day); err != nil {
 			return err
 		}
 	}
 	if t.heights {
-		fmt.Fprintf(w, "\n%s\n", wrap("Constants: "+j.harbour.Source, textWidth))
+		fmt.Fprintf(w, "\n%s\n", wrap(tideSource(j.harbour), textWidth))
+	}
+	if t.note != "" {
+		fmt.Fprintf(w, "\n%s\n", wrap(t.note, textWidth))
 	}
 	_, err := fmt.Fprintf(w, "\n%s\n", wrap(t.caution, textWidth))
 	return err
@@ -58,8 +64,10 @@ func writeDay(w *bufio.Writer, j *job, t *table, day civilDay) error {
 	}
 	for _, r := range list.rows {
 		line := "  " + clock(r.at, day, j.zone, seconds)
+		indent := len(line) + 2
 		if len(changes) > 0 { // an hour may come twice
 			line += " " + fmt.Sprintf("%-4s", shortReckoning(calendar.ReckoningAt(r.at, j.zone)))
+			indent = len(line) + 2
 		}
 		if longest > 0 {
 			line += fmt.Sprintf("  %-*s", longest, strings.ReplaceAll(r.word, "-", " "))
@@ -73,6 +81,12 @@ func writeDay(w *bufio.Writer, j *job, t *table, day civilDay) error {
 		}
 		if _, err := w.WriteString(strings.TrimRight(line, " ") + "\n"); err != nil {
 			return err
+		}
+		if r.more != nil {
+			margin := strings.Repeat(" ", indent)
+			for _, l := range r.more.lines {
+				fmt.Fprintf(w, "%s%s\n", margin, strings.ReplaceAll(wrap(l, textWidth-indent), "\n", "\n"+margin))
+			}
 		}
 	}
 	for _, remark := range list.remarks {

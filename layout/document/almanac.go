@@ -175,9 +175,9 @@ func (a *almanacFile) harbour(r *reader, what, name string, n *yaml.Node) {
 	}
 	h, reading, faults := readHarbour(f)
 	a.input(reading.Inputs...)
-	a.notes = append(a.notes, reading.Notes...)
+	a.notes = appendNew(a.notes, reading.Notes)
 	if len(faults) > 0 {
-		a.elsewhere = append(a.elsewhere, faults...)
+		a.elsewhere = appendNew(a.elsewhere, faults)
 		return
 	}
 	for _, other := range a.almanac.Harbours {

@@ -2,7 +2,7 @@
 // words of a language, and tables of harmonic constants. It explains what is
 // wrong in them, all of it at once, by file and line.
 //
-//	almanac.yaml ─┬─► harbour.yaml ──► constants.csv
+//	almanac.yaml ─┬─► harbour.yaml ──► constants.csv, or the standard port's harbour.yaml
 //	              └─► words of a language
 //
 //	File ──load──► text ──parse──► tree of YAML nodes ──schema──► Harbour, Almanac, Words

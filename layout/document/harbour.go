@@ -37,7 +37,10 @@ type harbourFile struct {
 	phases    predict.PhaseDress
 	local     bool // the phases are
 	inputs    []layout.Input
-	elsewhere Faults // in the table of constants
+	elsewhere Faults // in the table of constants, or the file of the standard port
+	// Of a secondary port:
+	standard       *predict.Harbour
+	notesElsewhere Notes // on the standard port's file
 }
 
 // unit returns the unit of the file's heights.
@@ -65,6 +68,11 @@ func (h *harbourFile) keys() []key {
 			option[predict.NodeFactors]{predict.MidYear.String(), predict.MidYear})},
 		{"phases", "", h.readPhases},
 		{"constants", "amplitude and phase lag of each constituent, or the name of a CSV file of them", h.constants},
+		{"standard-port", "", h.standardPort},
+		{"corrections", "", h.corrections},
+		{"smallest-rise", "", h.smallestRise},
+		{"levels", "", h.levels},
+		{"windows", "", h.windows},
 		{"source", "who worked out the constants, from what and when; printed with the sources", text(&b.Source, maxText)},
 		{"licence", "", text(&b.Licence, maxText)},
 		{"accuracy", "", text(&b.Accuracy, maxText)},
@@ -80,12 +88,16 @@ func readHarbour(f File) (*predict.Harbour, Reading, Faults) {
 	h := &harbourFile{inputs: []layout.Input{input}}
 	h.harbour.Unit = predict.Metre
 	if root := r.parse(data); root != nil {
-		found := r.group("the file", "a key, a colon and a value on each line", root, h.keys())
+		keys := h.keys()
+		if hasKey(root, "standard-port", "corrections") {
+			keys = h.secondaryKeys(keys)
+		}
+		found := r.group("the file", "a key, a colon and a value on each line", root, keys)
 		if len(r.faults) == 0 && len(h.elsewhere) == 0 {
 			h.doubts(r, found)
 		}
 	}
-	return &h.harbour, Reading{h.inputs, Notes(Faults(r.notes).inOrder())}, append(r.faults.inOrder(), h.elsewhere...)
+	return &h.harbour, Reading{h.inputs, append(Notes(Faults(r.notes).inOrder()), h.notesElsewhere...)}, append(r.faults.inOrder(), h.elsewhere...)
 }
 
 // maxLevel bounds mean levels, in metres: some datums lie far from the sea, but
@@ -105,6 +117,22 @@ func (h *harbourFile) meanLevel(r *reader, what string, n *yaml.Node) {
 	h.harbour.MeanLevel = x * unit.Metres
 }
 
+// maxRipple bounds the smallest rise, in metres: what is larger is a tide.
+const maxRipple = 1
+
+func (h *harbourFile) smallestRise(r *reader, what string, n *yaml.Node) {
+	x, ok := r.number(what, n)
+	if !ok {
+		return
+	}
+	unit := h.unit()
+	if !(x >= 0 && x*unit.Metres <= maxRipple) {
+		r.fault(n, "%s is %s %s: a rise from 0 to %d m is wanted", what, plain(x), unit.Symbol, maxRipple)
+		return
+	}
+	h.harbour.SmallestRise = x * unit.Metres
+}
+
 // doubts notes what is likely to be a mistake, at the keys found.
 func (h *harbourFile) doubts(r *reader, found map[string]*yaml.Node) {
 	b := &h.harbour
@@ -119,7 +147,8 @@ func (h *harbourFile) doubts(r *reader, found map[string]*yaml.Node) {
 	if apart := math.Abs(math.Remainder(clock-east/15, 24)); apart > most && b.Zone != time.UTC {
 		r.note(found["position"], "the clock of %s and the Sun at this longitude are %.0f hours apart: west is negative, or W", b.Zone, apart)
 	}
-	if few := 8; len(b.Constants) < few {
+	if few := 8; len(b.Constants) < few && b.Reduction == nil {
 		r.note(found["constants"], "predictions from fewer than %d constituents are rough: times and heights can be well off", few)
 	}
+	h.twins(r, found["constants"])
 }

@@ -13,7 +13,7 @@ func TestHarbourFaults(t *testing.T) {
 		place     = "position: {lat: 50.214, lon: -5.482}\n"
 		m2        = "  M2: [1.712, 134.2]\n"
 		source    = "source: invented for this test\n"
-		keysKnown = "known are harbour, position, time-zone, unit, datum, mean-level, node-factors, phases, constants, source, licence and accuracy"
+		keysKnown = "known are harbour, position, time-zone, unit, datum, mean-level, node-factors, phases, constants, standard-port, corrections, smallest-rise, levels, windows, source, licence and accuracy"
 		pair      = "[amplitude, phase lag], such as [1.712, 134.2], is wanted"
 		iana      = "write the IANA name of a zone, area/place, such as Europe/London"
 	)
@@ -96,13 +96,17 @@ func TestHarbourFaults(t *testing.T) {
 		{"greenwich", "+1", `harbour.yaml:8: phases is "+1": greenwich, local or the zone of the constants such as +01:00 is wanted`},
 		{"greenwich", "+15:00", `harbour.yaml:8: phases is "+15:00": zones run from -12:00 to +14:00`},
 
+		{source, source + "smallest-rise: -0.1\n", "harbour.yaml:19: smallest-rise is -0.1 m: a rise from 0 to 1 m is wanted"},
+		{source, source + "smallest-rise: 5\n", "harbour.yaml:19: smallest-rise is 5 m: a rise from 0 to 1 m is wanted"},
+		{source, source + "smallest-rise: little\n", `harbour.yaml:19: smallest-rise is "little": a number is wanted`},
+
 		// Constants.
 		{m2, "  M22: [1, 2]\n", `harbour.yaml:10: the constituent "M22" is not known; near it are MU2 and M2`},
 		{m2, "  KK1: [1, 2]\n", `harbour.yaml:10: the constituent "KK1" is not known; did you mean K1?`},
-		{m2, "  ν2: [1, 2]\n", `harbour.yaml:10: the constituent "ν2" is not known; did you mean NU2?`},
+		{m2, "  ν-2: [1, 2]\n", `harbour.yaml:10: the constituent "ν-2" is not known; did you mean NU2?`},
 		{m2, "  Lambda-2: [1, 2]\n", `harbour.yaml:10: the constituent "Lambda-2" is not known; did you mean LAM2?`},
 		{m2, "  Z0: [1, 2]\n", `harbour.yaml:10: "Z0" is the mean level, not a constituent: give it as mean-level`},
-		{m2, "  XYZZY: [1, 2]\n", `harbour.yaml:10: the constituent "XYZZY" is not known: leave it out, or see that its name is spelt as Schureman has it`},
+		{m2, "  XYZZY: [1, 2]\n", `harbour.yaml:10: the constituent "XYZZY" is not known: the command "ebbleaf list constituents" shows those that are, and any other can be given by its extended Doodson number, under the key doodson`},
 		{m2, m2 + "  m2: [1, 2]\n", "harbour.yaml:11: m2 names the same constituent as M2 on line 10"},
 		{m2, m2 + "  RHO: [1, 2]\n  RHO1: [1, 2]\n", "harbour.yaml:12: RHO1 names the same constituent as RHO on line 11"},
 		{m2, m2 + m2, "harbour.yaml:11: the key M2 stands twice: the first is on line 10"},
