@@ -37,15 +37,6 @@ type Input struct {
 	SHA256 string // of its bytes, hexadecimal
 }
 
-// Edition is a kind of print.
-type Edition string
-
-// The editions.
-const Booklet Edition = "booklet"
-
-// Editions returns the names of all editions.
-func Editions() []string { return []string{string(Booklet)} }
-
 // Unit is a unit of height.
 type Unit struct {
 	Symbol string  // m or ft
@@ -79,22 +70,5 @@ func InkSets() []Inks {
 	return []Inks{
 		{"black", page.Black},
 		{"harbour-blue", page.Ink{R: 12, G: 62, B: 112}},
-	}
-}
-
-// Paper is a paper size in portrait, millimetres.
-type Paper struct {
-	Name          string
-	Width, Height float64
-}
-
-// Papers returns the sizes a booklet can be printed on: ISO 216 and the North
-// American ones (ANSI/ASME Y14.1; half Letter is Letter halved).
-func Papers() []Paper {
-	return []Paper{
-		{"A5", 148, 210},
-		{"half-letter", 139.7, 215.9},
-		{"A4", 210, 297},
-		{"letter", 215.9, 279.4},
 	}
 }

@@ -3,12 +3,13 @@ package layout
 import (
 	"errors"
 	"fmt"
+	"strings"
 	"time"
 
 	"ebbleaf/layout/page"
 )
 
-// book is a booklet being made.
+// book is a print being made.
 type book struct {
 	almanac *Almanac
 	measure page.Measurer
@@ -16,24 +17,26 @@ type book struct {
 	doc     page.Document
 }
 
-// Make sets an almanac page by page:
+// Make sets an almanac in its edition.
 //
-//	cover │ how to read it, cautions
-//	then for each harbour
-//	springs, neaps and Moon │ level staff │ highest and lowest tides │ each month: tides (left), sky (right) │ tidal windows │ sources
-//
-// It reports a harbour whose constants cannot be used, and matter that does
-// not fit its page, with what to change.
+// It reports a harbour whose constants cannot be used, a paper that the edition
+// is not made for, and matter that does not fit its page, with what to change.
 func Make(a *Almanac, m page.Measurer) (*page.Document, error) {
 	if len(a.Harbours) == 0 {
 		return nil, errors.New("the almanac names no harbour")
 	}
-	b := &book{almanac: a, measure: m, styles: bookletStyles(a.Paper)}
-	first := a.Harbours[0]
+	e, ok := a.Edition.lookup()
+	if !ok {
+		return nil, fmt.Errorf("there is no edition %q: known are %s", a.Edition, strings.Join(Editions(), ", "))
+	}
+	if ok, papers := a.Edition.Takes(a.Paper); !ok {
+		return nil, fmt.Errorf("the edition %s is printed on %s, not on %s", a.Edition, papers, a.Paper.Name)
+	}
+	b := &book{almanac: a, measure: m}
 	b.doc = page.Document{
 		Title:    a.title(),
 		Author:   a.Publisher,
-		Subject:  a.Words.Say("cover.subject", "harbour", first.Name),
+		Subject:  a.Words.Say("cover.subject", "harbour", a.Harbours[0].Name),
 		Language: a.Words.Tag,
 		Dated:    page.Date{Year: a.From.Year, Month: int(a.From.Month), Day: a.From.Day},
 	}
@@ -45,29 +48,42 @@ func Make(a *Almanac, m page.Measurer) (*page.Document, error) {
 		}
 		spans = append(spans, s)
 	}
+	if err := e.set(b, spans); err != nil {
+		return nil, err
+	}
+	return &b.doc, nil
+}
+
+// booklet sets a booklet page by page:
+//
+//	cover │ how to read it, cautions
+//	then for each harbour
+//	springs, neaps and Moon │ level staff │ highest and lowest tides │ each month: tides (left), sky (right) │ tidal windows │ sources
+func (b *book) booklet(spans []*span) error {
+	b.styles = bookletStyles(b.almanac.Paper)
 	b.cover(spans)
 	if err := b.reading(spans[0]); err != nil {
-		return nil, err
+		return err
 	}
 	for _, s := range spans {
 		if err := b.fortnights(s); err != nil {
-			return nil, err
+			return err
 		}
 		if err := b.levels(s); err != nil {
-			return nil, err
+			return err
 		}
 		b.toLeft(s) // month spreads begin on a left-hand page
 		if err := b.monthSpreads(s); err != nil {
-			return nil, err
+			return err
 		}
 		if err := b.windows(s); err != nil {
-			return nil, err
+			return err
 		}
 		if err := b.sources(s); err != nil {
-			return nil, err
+			return err
 		}
 	}
-	return &b.doc, nil
+	return nil
 }
 
 // title returns the title of the document: the cover's words in one line.

@@ -61,14 +61,7 @@ type almanacFile struct {
 func newAlmanac(languages fs.FS) *almanacFile {
 	a := &almanacFile{languages: languages}
 	a.almanac.Edition = layout.Booklet
-	a.almanac.Paper = layout.Papers()[0]
-	for _, p := range layout.Papers() {
-		if p.Name == "A5" {
-			a.almanac.Paper = p
-		}
-	}
 	a.almanac.Ink = layout.InkSets()[0]
-	a.almanac.Decimals = 1
 	return a
 }
 
@@ -120,12 +113,32 @@ func (a *almanacFile) finish(r *reader) {
 	a.period.finish(r, a)
 	b := &a.almanac
 	b.From, b.To = a.period.first, a.period.last
+	if a.found["paper"] == nil {
+		b.Paper = b.Edition.Papers()[0]
+	} else if ok, papers := b.Edition.Takes(b.Paper); !ok && b.Paper.Name != "" {
+		r.fault(a.found["paper"], "paper is %s: a %s is printed on %s", b.Paper.Name, b.Edition, papers)
+	}
+	if a.found["decimals"] == nil {
+		b.Decimals = usualDecimals(b.Harbours)
+	}
 	if b.Unit == (layout.Unit{}) && len(b.Harbours) > 0 {
 		b.Unit = layout.Metres
 		if b.Harbours[0].Unit == predict.Foot {
 			b.Unit = layout.Feet
 		}
 	}
+}
+
+// usualDecimals returns how many decimals heights are printed to unless the
+// file says: one, or two where one would leave nothing of the tide.
+func usualDecimals(harbours []*predict.Harbour) int {
+	const small = 0.5 // metres
+	for _, h := range harbours {
+		if h.SpringRange() < small {
+			return 2
+		}
+	}
+	return 1
 }
 
 // input notes a file that was read, once.
