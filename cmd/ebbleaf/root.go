@@ -38,6 +38,7 @@ lies and holds its constants; an almanac file says what to print. Start with
 	root.SetVersionTemplate("{{.Name}} {{.Version}}\n")
 	root.SetHelpCommand(helpCommand(root))
 	root.AddCommand(p.start(), p.proof(), p.press(), p.list(), p.levels(), p.seek())
+	root.AddCommand(p.fit(), p.compare())
 	return root
 }
 

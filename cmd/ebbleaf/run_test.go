@@ -104,11 +104,11 @@ func TestRunIsTheProgram(t *testing.T) {
 func TestCommandLineFaults(t *testing.T) {
 	h := skerrow(t)
 	for _, c := range []struct{ args, want string }{
-		{"lsit", `there is no command "lsit"; did you mean list? (ebbleaf --help tells more)`},
-		{"xyzzy", `there is no command "xyzzy": there are levels, list, press, proof, seek and start (ebbleaf --help tells more)`},
+		{"lsit", `there is no command "lsit"; did you mean list or fit? (ebbleaf --help tells more)`},
+		{"xyzzy", `there is no command "xyzzy": there are compare, fit, levels, list, press, proof, seek and start (ebbleaf --help tells more)`},
 		{"list tide " + h, `there is no list "tide"; did you mean tides? (ebbleaf list --help tells more)`},
 		{"list moon", `there is no list "moon": there are constituents, extremes, heights, sky, tides and windows (ebbleaf list --help tells more)`},
-		{"help lsit", `there is no command "lsit"; did you mean list? (ebbleaf --help tells more)`},
+		{"help lsit", `there is no command "lsit"; did you mean list or fit? (ebbleaf --help tells more)`},
 		{"help list moon", `there is no list "moon": there are constituents, extremes, heights, sky, tides and windows (ebbleaf list --help tells more)`},
 		{"help press x", `press has no commands below it (ebbleaf press --help tells more)`},
 		{"--frob", `there is no flag --frob (ebbleaf --help tells more)`},
@@ -174,7 +174,7 @@ func TestHelp(t *testing.T) {
 		if !strings.Contains(byFlag.out, c.want) || !strings.Contains(byFlag.out, "Examples:\n  ebbleaf ") || byFlag.err != "" {
 			t.Errorf("the help of %q lacks %q or an example:\n%s", c.command, c.want, byFlag.out)
 		}
-		for _, word := range []string{"compare", "completion"} {
+		for _, word := range []string{"completion"} {
 			if strings.Contains(byFlag.out, "ebbleaf "+word) || strings.Contains(byFlag.out, "\n  "+word) {
 				t.Errorf("the help of %q speaks of %s", c.command, word)
 			}
