@@ -14,7 +14,10 @@ type Almanac struct {
 	From, To calendar.Date
 	Edition  Edition
 	Paper    Paper
-	Words    *Words
+	// ToFold asks for a number of pages that sheets folded once come to, a
+	// multiple of four, with pages for notes where pages are wanting.
+	ToFold bool
+	Words  *Words
 	// Unit is what heights are printed in, to so many Decimals.
 	Unit     Unit
 	Decimals int

@@ -49,16 +49,19 @@ func (b *book) bar(s *sheet, m *monthPart, d *Day, scale *clockScale, foot float
 	}
 }
 
-// barName names the bar over the strips, beside a piece of it.
-func (b *book) barName(s *sheet, m *monthPart, strip column, y float64) {
+// barName names the bar over the strips, beside a piece of it. A long name may
+// begin so far before the strips.
+func (b *book) barName(s *sheet, m *monthPart, strip column, y, before float64) {
 	place, ok := m.barPlace()
 	if !ok {
 		return
 	}
 	k := b.scale()
-	s.put(page.Area(page.Rect{X: strip.X, Y: y - (0.8+barHeight/2)*k, W: 5 * k, H: barHeight * k}, page.Black, "window"))
 	name := m.harbour.Places[place].Name
-	s.text(strip.X+6*k, y, page.Left, b.fitLabel(s, strip.W-9*k, name), name, s.area)
+	over := min(max(0, s.width(b.styles.label, name)-(strip.W-9*k)), before)
+	strip.X, strip.W = strip.X-over, strip.W+over
+	s.put(page.Area(page.Rect{X: strip.X, Y: y - (0.8+barHeight/2)*k, W: 5 * k, H: barHeight * k}, page.Black, "window"))
+	s.text(strip.X+6*k, y, page.Left, b.fitLabel(s, strip.W-9*k, name), name, page.Rect{X: s.area.X - over, Y: s.area.Y, W: s.area.W + over, H: s.area.H})
 }
 
 // barExplained says what the bar is, to follow what is said of the strip.

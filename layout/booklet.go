@@ -65,7 +65,7 @@ func (b *book) booklet(spans []*span) error {
 	if err := b.reading(spans[0]); err != nil {
 		return err
 	}
-	for _, s := range spans {
+	for i, s := range spans {
 		if err := b.fortnights(s); err != nil {
 			return err
 		}
@@ -79,7 +79,11 @@ func (b *book) booklet(spans []*span) error {
 		if err := b.windows(s); err != nil {
 			return err
 		}
-		if err := b.sources(s); err != nil {
+		end := b.sources
+		if i == len(spans)-1 {
+			end = b.sourcesToFold
+		}
+		if err := end(s); err != nil {
 			return err
 		}
 	}

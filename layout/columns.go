@@ -30,14 +30,59 @@ type tideColumns struct {
 // x returns where tide column n begins.
 func (c *tideColumns) x(n int) float64 { return c.first + float64(n)*c.width }
 
-// tideColumns chooses as many columns as the busy days of a month need, at the
-// largest type that fits. Height is the room for lines on a page. Where not even
-// the smallest type fits, the tides of a busy day are shared out over two
-// lines, or more.
+// tideColumns chooses the columns of fitColumns or, where not even the smallest
+// type fits, columns that share the tides of a busy day out over two lines or
+// more, the month being split.
 func (b *book) tideColumns(s *sheet, days []Day, f format, height float64) tideColumns {
+	c, try := b.columnsOf(s, days, f)
+	if c.fit(b, days, f, height, try) {
+		return *c
+	}
+	most := columnsWanted(days)
+	for n := 2; ; n++ {
+		for _, size := range b.styles.tides {
+			if try((most+n-1)/n, size) {
+				return *c
+			}
+		}
+		if n > most {
+			panic("layout: a single tide is wider than the page")
+		}
+	}
+}
+
+// fitColumns chooses as many columns as the busy days of a month need, at the
+// largest type that fits. Height is the room for lines on a page. False where
+// not even the smallest type fits.
+func (b *book) fitColumns(s *sheet, days []Day, f format, height float64) (tideColumns, bool) {
+	c, try := b.columnsOf(s, days, f)
+	ok := c.fit(b, days, f, height, try)
+	return *c, ok
+}
+
+// fit sets c to the largest type at which days fit a height, and to the most
+// columns that can be had with it; false where there is none.
+func (c *tideColumns) fit(b *book, days []Day, f format, height float64, try func(int, [2]float64) bool) bool {
 	k, st := b.scale(), b.styles
-	c := tideColumns{}
-	c.ribbon = column{s.area.X, 13 * k}
+	for _, size := range st.tides {
+		figures := style{size: size[0] * k}
+		for count := columnsWanted(days); count > 0; count-- {
+			line := height / float64(linesWith(days, count))
+			if line >= st.line.least*k && line >= f.timeHeight(figures) && line >= st.line.figures*figures.capHeight() && try(count, size) {
+				return true
+			}
+		}
+	}
+	return false
+}
+
+// columnsOf returns the columns of a page without those of the tides, and a
+// function that adds so many of them at a size, or returns false where they are
+// too wide.
+func (b *book) columnsOf(s *sheet, days []Day, f format) (*tideColumns, func(count int, size [2]float64) bool) {
+	k, st := b.scale(), b.styles
+	c := &tideColumns{}
+	c.ribbon = column{s.area.X, st.ribbon * k}
 	c.share = column{c.ribbon.Right() + 0.5*k, max(6*k, s.width(st.figure, "100")+0.6*k)}
 	weekday := 0.0
 	for d := range 7 {
@@ -63,8 +108,7 @@ func (b *book) tideColumns(s *sheet, days []Day, f format, height float64) tideC
 		}
 		return w
 	}
-	// try sets c to so many columns at a size; false where they are too wide.
-	try := func(count int, size [2]float64) bool {
+	return c, func(count int, size [2]float64) bool {
 		for _, face := range []page.Face{page.Table, page.Narrow} {
 			ts, hs := style{face, size[0] * k}, style{face, size[1] * k}
 			t, h := widest(ts.bold(), times), widest(hs.bold(), heights)
@@ -85,30 +129,10 @@ func (b *book) tideColumns(s *sheet, days []Day, f format, height float64) tideC
 		}
 		return false
 	}
-	// The largest type at which the month fits one spread; else, the month being
-	// split, columns that share the tides of a busy day evenly over its lines.
-	most := columnsWanted(days)
-	for _, size := range tideSizes {
-		for count := most; count > 0; count-- {
-			line := height / float64(linesWith(days, count))
-			if line >= leastLine*k && line >= f.timeHeight(style{size: size[0] * k}) && try(count, size) {
-				return c
-			}
-		}
-	}
-	for n := 2; ; n++ {
-		for _, size := range tideSizes {
-			if try((most+n-1)/n, size) {
-				return c
-			}
-		}
-		if n > most {
-			panic("layout: a single tide is wider than the page")
-		}
-	}
 }
 
-// tideSizes are the sizes of times and heights to choose from, points at A5.
+// tideSizes are the sizes of times and heights that booklets choose from, points
+// at A5.
 var tideSizes = [][2]float64{{12, 10}, {11.5, 10}, {11, 9.5}, {10.5, 9}, {10, 9}, {9.5, 8.5}, {9, 8.5}, {8.5, 8}, {8, 8}}
 
 // linesWith returns how many lines days take with so many tides to a line.

@@ -10,7 +10,10 @@ type Edition string
 
 // The editions.
 const (
-	Booklet Edition = "booklet" // pages to turn, a spread a month
+	Booklet   Edition = "booklet" // pages to turn, a spread a month
+	WallSheet Edition = "sheet"   // a month on the wall
+	YearSheet Edition = "year"    // twelve months on one sheet
+	Pocket    Edition = "pocket"  // a season on one sheet, folded to eight small pages
 )
 
 // edition is what there is to know of an edition.
@@ -24,6 +27,9 @@ type edition struct {
 func editions() []edition {
 	return []edition{
 		{Booklet, []string{"A5", "half-letter", "A4", "letter"}, (*book).booklet},
+		{WallSheet, []string{"A3", "A4", "A2", "tabloid"}, (*book).wallSheets},
+		{YearSheet, []string{"A3", "A2", "tabloid"}, (*book).yearSheets},
+		{Pocket, []string{"A4", "letter", "A3"}, (*book).pocket},
 	}
 }
 

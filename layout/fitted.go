@@ -29,9 +29,9 @@ func (b *book) fitted(s *sheet, st style, width float64, name string) fitted {
 // fitLabel returns the label style, made smaller where a heading is wider
 // than its column.
 func (b *book) fitLabel(s *sheet, width float64, text string) style {
-	st, ok := s.shrink(b.styles.label, 6, width, text)
+	st, ok := s.shrink(b.styles.label, 6.5, width, text)
 	if !ok {
-		st, _ = s.shrink(b.styles.label.narrow(), 6, width, text)
+		st, _ = s.shrink(b.styles.label.narrow(), 6.5, width, text)
 	}
 	return st
 }

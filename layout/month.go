@@ -24,14 +24,12 @@ func (b *book) monthSpreads(s *span) error {
 	f := b.almanac.format(s.harbour.Zone)
 	for _, days := range s.months() {
 		columns := b.monthColumns(s, f, days)
-		for pieces := 1; ; pieces++ {
-			if pieces > len(days) {
-				return fmt.Errorf("%s, %s: the tides of one day do not fit a page of %s; take larger paper",
-					s.harbour.Name, f.monthYear(days[0].Date), b.almanac.Paper.Name)
-			}
-			if b.monthPieces(s, f, days, columns, pieces) {
-				break
-			}
+		err := b.inPieces(s, f, days, func(m *monthPart) bool {
+			m.columns = columns
+			return b.monthSpread(m)
+		})
+		if err != nil {
+			return err
 		}
 	}
 	return nil
@@ -49,20 +47,26 @@ func (b *book) monthColumns(s *span, f format, days []Day) tideColumns {
 	return b.tideColumns(trial, days, f, bottom-top-(5*weekGap+2*remarkLine)*b.scale())
 }
 
-// monthPieces sets a month in so many spreads; false where that is too few.
-func (b *book) monthPieces(s *span, f format, days []Day, columns tideColumns, pieces int) bool {
+// inPieces sets a month in as few pieces as it takes. Set is given one after
+// the other, and returns false where the rows of one do not fit.
+func (b *book) inPieces(s *span, f format, days []Day, set func(*monthPart) bool) error {
 	before := len(b.doc.Pages)
-	for p := range pieces {
-		m := &monthPart{span: s, f: f, days: days[len(days)*p/pieces : len(days)*(p+1)/pieces], columns: columns}
-		if pieces > 1 {
-			m.part = p + 1
+	for pieces := 1; pieces <= len(days); pieces++ {
+		fits := true
+		for p := 0; p < pieces && fits; p++ {
+			m := &monthPart{span: s, f: f, days: days[len(days)*p/pieces : len(days)*(p+1)/pieces]}
+			if pieces > 1 {
+				m.part = p + 1
+			}
+			fits = set(m)
 		}
-		if !b.monthSpread(m) {
-			b.doc.Pages = b.doc.Pages[:before]
-			return false
+		if fits {
+			return nil
 		}
+		b.doc.Pages = b.doc.Pages[:before]
 	}
-	return true
+	return fmt.Errorf("%s, %s: the tides of one day do not fit a page of %s; take larger paper",
+		s.harbour.Name, f.monthYear(days[0].Date), b.almanac.Paper.Name)
 }
 
 // monthName is the name of a page of a month in the document.
@@ -89,7 +93,7 @@ func (b *book) monthSpread(m *monthPart) bool {
 		lines[i] = tideLines(len(m.days[i].Turns), m.columns.count)
 		remarks[i] = b.remarks(m, &m.days[i])
 	}
-	r, ok := newRows(m.days, lines, remarks, headings+1.2*k, bottom, k)
+	r, ok := newRows(m.days, lines, remarks, headings+1.2*k, bottom, k, b.styles.line)
 	if !ok {
 		return false
 	}
@@ -104,7 +108,7 @@ func (b *book) monthSpread(m *monthPart) bool {
 	right := b.newSheet(m.monthName("sky"))
 	b.foot(right)
 	b.monthHead(right, m)
-	b.skyPage(right, m, r, headings)
+	b.skyPage(right, m, r, headings, true)
 	b.finish(right)
 	return true
 }
@@ -112,8 +116,8 @@ func (b *book) monthSpread(m *monthPart) bool {
 // headings is the room between the head of a table page and its first row.
 func (b *book) headings() float64 { return 5.6*b.scale() + b.styles.label.leading() }
 
-// scale is by how much a print is larger than A5.
-func (b *book) scale() float64 { return b.styles.folio.size / 9 }
+// scale is by how much a print is larger than it was drawn up.
+func (b *book) scale() float64 { return b.styles.scale }
 
 // remarks returns what is said under a day's row.
 func (b *book) remarks(m *monthPart, d *Day) []string {
@@ -136,12 +140,17 @@ func (b *book) remarks(m *monthPart, d *Day) []string {
 // monthHead sets what every table page says at its top: month, harbour, zone
 // and summer time, unit and datum. It returns the y below.
 func (b *book) monthHead(s *sheet, m *monthPart) float64 {
-	st, w, k := b.styles, b.almanac.Words, b.scale()
-	y := s.area.Y + st.heading.ascent()
 	month := m.f.monthYear(m.days[0].Date)
 	if m.part > 0 {
-		month = w.Say("month-part", "month", month, "from", m.days[0].Date.Day, "to", m.days[len(m.days)-1].Date.Day)
+		month = b.almanac.Words.Say("month-part", "month", month, "from", m.days[0].Date.Day, "to", m.days[len(m.days)-1].Date.Day)
 	}
+	return b.tableHead(s, m, month)
+}
+
+// tableHead is monthHead for any time, in words.
+func (b *book) tableHead(s *sheet, m *monthPart, month string) float64 {
+	st, w, k := b.styles, b.almanac.Words, b.scale()
+	y := s.area.Y + st.heading.ascent()
 	// The month stands at the outer edge, where the thumb finds it; the
 	// harbour's name towards the fold, as large as it fits.
 	outer, inner, outerAlign, innerAlign := s.area.X, s.area.Right(), page.Left, page.Right
@@ -159,7 +168,7 @@ func (b *book) monthHead(s *sheet, m *monthPart) float64 {
 		y = max(y, line)
 		line += name.style.leading()
 	}
-	y = b.markReduced(s, m.harbour, outer, outerAlign, y+4.4*k)
+	y = b.markReduced(s, m.harbour, outer, outerAlign, y+max(4.4*k, st.heading.descent()+st.label.ascent()))
 	said := w.Say("month-head.units", "unit", w.Say("unit."+b.almanac.Unit.Symbol), "datum", m.harbour.Datum)
 	if rise := m.f.ripple(m.harbour); rise != "" {
 		said = w.Say("month-head.ripple", "units", said, "rise", rise, "unit", m.f.unit.Symbol)

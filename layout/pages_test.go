@@ -96,6 +96,12 @@ func TestPagesAreSound(t *testing.T) {
 					// Every other print is in feet, with the clock of twelve hours.
 					a := yearOf(h, w, 2027)
 					a.Edition, a.Paper = edition, paper
+					if edition == layout.Pocket { // it takes a season
+						a.From.Month, a.To = 3, calendar.Date{Year: 2027, Month: 5, Day: 31}
+						if i%2 == 1 { // or two months with the broader clock
+							a.To = calendar.Date{Year: 2027, Month: 4, Day: 30}
+						}
+					}
 					a.Title = "Tides for everyone who keeps a boat at " + h.Name
 					a.Publisher = "The United Boat Clubs, Harbour Trustees and Rowing Society of the Skerrow Shore"
 					if i%2 == 1 {
@@ -115,11 +121,17 @@ func sound(t *testing.T, a *layout.Almanac, set *face.Set) int {
 	t.Helper()
 	where := fmt.Sprintf("%s on %s in %s", a.Edition, a.Paper.Name, a.Unit.Symbol)
 	doc, err := layout.Make(a, set)
+	if a.Edition == layout.Pocket && err != nil && strings.Contains(err.Error(), "take a shorter period") {
+		// Eight tides a day with the broader clock are too much for one sheet: what
+		// the sentence advises must help.
+		a.To = a.From.Add(20)
+		doc, err = layout.Make(a, set)
+	}
 	if err != nil {
 		t.Errorf("%s: %v", where, err)
 		return 0
 	}
-	problems := page.Check(*doc, set, page.Rules{Margin: 4, Figures: 8, Words: 6.5, Missing: set.Missing})
+	problems := page.Check(*doc, set, page.Rules{Margin: 4, Figures: leastFigures(a.Edition), Words: 6.5, Missing: set.Missing})
 	for i, p := range problems {
 		if i == 5 {
 			t.Errorf("%s: and %d more", where, len(problems)-i)
@@ -128,6 +140,17 @@ func sound(t *testing.T, a *layout.Almanac, set *face.Set) int {
 		t.Errorf("%s: %s", where, p)
 	}
 	return len(doc.Pages)
+}
+
+// leastFigures returns the least size of figures in an edition, points.
+func leastFigures(e layout.Edition) float64 {
+	switch e {
+	case layout.WallSheet:
+		return 11
+	case layout.YearSheet, layout.Pocket:
+		return 6.5
+	}
+	return 8
 }
 
 // TestGolden compares some pages of the demo almanac with the ones on file.

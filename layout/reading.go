@@ -100,14 +100,20 @@ func (b *book) reading(sp *span) error {
 // cautions returns the cautions that are always printed and then the
 // publisher's own.
 func (b *book) cautions(sp *span) []string {
-	var all []string
-	for i := range 6 {
-		all = append(all, b.almanac.Words.Say(fmt.Sprint("caution.full.", i), "datum", sp.harbour.Datum))
-	}
+	all := b.standingCautions(sp)
 	for _, h := range b.almanac.Harbours {
 		all = append(all, b.reducedCautions(h)...)
 	}
 	return append(all, b.almanac.Cautions...)
+}
+
+// standingCautions returns the cautions that hold for every harbour.
+func (b *book) standingCautions(sp *span) []string {
+	var all []string
+	for i := range 6 {
+		all = append(all, b.almanac.Words.Say(fmt.Sprint("caution.full.", i), "datum", sp.harbour.Datum))
+	}
+	return all
 }
 
 // sampleDay returns a day that shows what a table can show: the first springs

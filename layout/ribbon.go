@@ -7,11 +7,10 @@ import (
 	"ebbleaf/predict"
 )
 
-// ribbon draws the swell: a band as wide as the range of each day, with crests
-// and troughs named where they fall.
-func (b *book) ribbon(s *sheet, m *monthPart, r *rows) {
-	w, k := b.almanac.Words, b.scale()
-	col := m.columns.ribbon
+// band draws the swell: a band as wide as the range of each day, the largest
+// of all pages as wide as col, with a line along it where edged. It returns the edge of the band in the middle of each
+// day's row, and none where there is no tide to speak of.
+func (b *book) band(s *sheet, m *monthPart, r *rows, col column, edged bool) []page.Point {
 	most := 0.0
 	for i := range m.span.days {
 		if v := m.span.days[i].Range; v > most {
@@ -19,7 +18,7 @@ func (b *book) ribbon(s *sheet, m *monthPart, r *rows) {
 		}
 	}
 	if most == 0 || math.IsNaN(most) {
-		return
+		return nil
 	}
 	var pts []page.Point
 	for i := range m.days {
@@ -41,8 +40,22 @@ func (b *book) ribbon(s *sheet, m *monthPart, r *rows) {
 	smooth(pts, func(a, c, p page.Point) { area.Curve(a, c, p); edge.Curve(a, c, p) })
 	area.Line(col.X, r.end)
 	area.End()
-	s.put(area, edge)
+	s.put(area)
+	if edged {
+		s.put(edge)
+	}
+	return pts[1 : len(pts)-1]
+}
 
+// ribbon draws the swell with crests and troughs named where they fall.
+func (b *book) ribbon(s *sheet, m *monthPart, r *rows) {
+	w, k := b.almanac.Words, b.scale()
+	col := m.columns.ribbon
+	pts := b.band(s, m, r, col, true)
+	if pts == nil {
+		return
+	}
+	tint := page.Grey(tintSwell)
 	for i := range m.days {
 		key := ""
 		switch m.days[i].Crest {
@@ -54,10 +67,10 @@ func (b *book) ribbon(s *sheet, m *monthPart, r *rows) {
 			continue
 		}
 		text := w.Say(key + m.suffix())
-		fit, _ := s.shrink(style{page.TableBold, 7.5 * k}, 6.5*k, col.W-0.8*k, text)
+		fit, _ := s.shrink(style{page.TableBold, 7.5 * k}, b.styles.word, col.W-0.8*k, text)
 		// The word stands in the ribbon where that is wide enough for it, else
 		// beside it, smaller if need be.
-		pad, edge := 0.5*k, pts[i+1].X
+		pad, edge := 0.5*k, pts[i].X
 		inside, beside := edge-col.X-2*pad, m.columns.share.Right()-s.width(b.styles.figure, m.f.percent(m.days[i].Share))-edge-2*pad
 		x, ground, cell := col.X+pad, &tint, col.across(r, i)
 		if s.width(fit, text) > inside {
@@ -65,7 +78,14 @@ func (b *book) ribbon(s *sheet, m *monthPart, r *rows) {
 				x, ground = edge+pad, nil
 				cell.W = edge + beside + 2*pad - cell.X
 			}
-			fit, _ = s.shrink(fit, 6.5*k, max(inside, beside), text)
+			var ok bool
+			if fit, ok = s.shrink(fit, b.styles.word, max(inside, beside), text); !ok {
+				fit, ok = s.shrink(fit.narrow(), b.styles.word, max(inside, beside), text)
+			}
+			if !ok { // across the edge
+				x, ground = col.X+pad, &tint
+				cell.W = edge + beside + 2*pad - cell.X
+			}
 		}
 		s.put(page.Text{X: x, Y: r.baseline(i, 0, fit), Face: fit.face, Size: fit.size, S: text, Cell: cell, Ground: ground})
 	}

@@ -24,13 +24,16 @@ type rows struct {
 const (
 	weekGap    = 1.3
 	remarkLine = 3.5
-	leastLine  = 3.9
-	mostLine   = 6.0
 )
 
+// lineHeights are the least and the most that a line of tides is high,
+// millimetres at scale 1, and how many times as high as its figures at the least.
+type lineHeights struct{ least, most, figures float64 }
+
 // newRows fits days between two heights on the page; false where they do not
-// fit even with the lowest lines. K is the scale of the print.
-func newRows(days []Day, lines []int, remarks [][]string, top, bottom, k float64) (*rows, bool) {
+// fit even with the lowest lines. K is the scale of the print, high how high a
+// line may be.
+func newRows(days []Day, lines []int, remarks [][]string, top, bottom, k float64, high lineHeights) (*rows, bool) {
 	r := &rows{days: days, lines: lines, remarks: remarks}
 	total, fixed := 0, 0.0
 	for i := range days {
@@ -40,8 +43,8 @@ func newRows(days []Day, lines []int, remarks [][]string, top, bottom, k float64
 			fixed += weekGap * k
 		}
 	}
-	r.line = min((bottom-top-fixed)/float64(total), mostLine*k)
-	if r.line < leastLine*k {
+	r.line = min((bottom-top-fixed)/float64(total), high.most*k)
+	if r.line < high.least*k {
 		return nil, false
 	}
 	y := top

@@ -8,12 +8,17 @@ import (
 	"ebbleaf/layout/page"
 )
 
-// skyPage sets the right page: the day strips, then Sun and Moon.
-func (b *book) skyPage(s *sheet, m *monthPart, r *rows, headings float64) {
+// skyPage sets the right page: the day strips, then Sun and Moon. The days have
+// their numbers there where they are dated.
+func (b *book) skyPage(s *sheet, m *monthPart, r *rows, headings float64, dated bool) {
 	st, w, k := b.styles, b.almanac.Words, b.scale()
 	// Columns from the fold out: date, strip, Sun, disc, Moon.
-	timeWidth := max(s.width(st.figure, shape(m.f.hourMinute(22, 22))), s.width(st.figure, w.Say("sky.none"))) + 2.4*k
+	timeWidth := b.skyTimeWidth(s, m)
 	date := column{s.area.X, s.width(st.strong, "30") + 1.5*k}
+	before := 0.0 // room over what stands beside the strips
+	if !dated {
+		date.W, before = 2*k, 60*k
+	}
 	moonset := column{s.area.Right() - timeWidth, timeWidth}
 	moonrise := column{moonset.X - timeWidth, timeWidth}
 	disc := column{moonrise.X - 4.6*k, 4.6 * k}
@@ -22,7 +27,7 @@ func (b *book) skyPage(s *sheet, m *monthPart, r *rows, headings float64) {
 	strip := column{date.Right() + 1*k, sunrise.X - date.Right() - 1.6*k}
 
 	b.hourHeadings(s, m, strip, headings)
-	b.barName(s, m, strip, headings-b.styles.label.leading())
+	b.barName(s, m, strip, headings-b.styles.label.leading(), before)
 	for _, h := range []struct {
 		col column
 		key string
@@ -48,13 +53,21 @@ func (b *book) skyPage(s *sheet, m *monthPart, r *rows, headings float64) {
 			day = day.bold()
 		}
 		y := r.baseline(i, 0, day)
-		s.text(date.Right()-0.8*k, y, page.Right, day, fmt.Sprint(d.Date.Day), date.across(r, i))
+		if dated {
+			s.text(date.Right()-0.8*k, y, page.Right, day, fmt.Sprint(d.Date.Day), date.across(r, i))
+		}
 		b.riseSet(s, m, r, i, y, sunrise, sunset, d.Sky.Sun.Rise, d.Sky.Sun.Set, d.Sky.Sun.State)
 		b.riseSet(s, m, r, i, y, moonrise, moonset, d.Sky.Moon.Rise, d.Sky.Moon.Set, d.Sky.Moon.State)
 		c := page.Point{X: disc.X + disc.W/2 + 0.6*k, Y: r.top[i] + r.line/2}
 		s.moonDisc(c, min(1.7*k, r.line*0.42), d.Sky.Moon.Lit, float64(d.Sky.Moon.BrightLimb))
 	}
 	r.weekRules(s, s.area.X, s.area.Right(), k)
+}
+
+// skyTimeWidth returns the width of a column of rises or sets.
+func (b *book) skyTimeWidth(s *sheet, m *monthPart) float64 {
+	figure := b.styles.figure
+	return max(s.width(figure, shape(m.f.hourMinute(22, 22))), s.width(figure, b.almanac.Words.Say("sky.none"))) + 2.4*b.scale()
 }
 
 // riseSet sets the rise and the set of a body on one day, or that it stays up
@@ -68,7 +81,7 @@ func (b *book) riseSet(s *sheet, m *monthPart, r *rows, i int, y float64, riseCo
 			key = "sky.down-all-day"
 		}
 		text := w.Say(key)
-		fit, _ := s.shrink(st.note, 6.5, setCol.Right()-riseCol.X-0.6, text)
+		fit, _ := s.shrink(st.note, 6.5, setCol.Right()-riseCol.X-1.2*b.scale(), text)
 		s.text(setCol.Right(), y, page.Right, fit, text, r.band(i, riseCol.X, setCol.Right()))
 		return
 	}

@@ -74,7 +74,7 @@ func (b *book) hourHeadings(s *sheet, m *monthPart, strip column, y float64) {
 		if b.almanac.Clock == Clock12 {
 			text = fmt.Sprint((h+11)%12 + 1)
 		}
-		s.text(strip.X+strip.W*float64(h)/24, y, page.Centre, style{page.Table, 8 * b.scale()}, text, s.area)
+		s.text(strip.X+strip.W*float64(h)/24, y, page.Centre, b.styles.hours, text, s.area)
 	}
 }
 

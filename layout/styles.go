@@ -8,7 +8,14 @@ type styles struct {
 	title, heading, head, label, body, note, caution, folio style
 	figure, strong                                          style // figures in tables
 	date                                                    style // the day in a table of days
+	hours                                                   style // over the strips
 	least                                                   float64
+	word                                                    float64 // the least size of words in a table
+	scale                                                   float64 // lengths are drawn up for A5, or what the edition starts from
+	// Of tables of tides, points and millimetres at scale 1 (see book.scale).
+	tides  [][2]float64 // sizes of times and heights to choose from, the largest first
+	line   lineHeights
+	ribbon float64 // width of the swell at its widest
 }
 
 // booklet sizes are drawn up for A5 and grow with the paper.
@@ -27,7 +34,13 @@ func bookletStyles(p Paper) styles {
 		figure:  st(page.Table, 8.5),
 		strong:  st(page.TableBold, 8.5),
 		date:    st(page.Table, 9.5),
+		hours:   st(page.Table, 8),
 		least:   8,
+		word:    6.5 * k,
+		scale:   k,
+		tides:   tideSizes,
+		line:    lineHeights{3.9, 6, 1},
+		ribbon:  13,
 	}
 }
 

@@ -80,7 +80,7 @@ func (b *book) windowPage(m *monthPart, t *windowTable, n int, opens bool) bool 
 			remarks[i] = append(remarks[i], m.f.change(c))
 		}
 	}
-	r, ok := newRows(m.days, lines, remarks, y+1.2*k, bottom, k)
+	r, ok := newRows(m.days, lines, remarks, y+1.2*k, bottom, k, b.styles.line)
 	if !ok {
 		return false
 	}

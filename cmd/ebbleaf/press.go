@@ -29,9 +29,15 @@ file the example is made that comes with the program, whose tides are invented.
 
 Nothing is written when a file has a fault. A file that is there already is kept
 unless --replace is given; one that would not change is left alone. The same
-files always give the same booklet, to the byte.`,
+files always give the same booklet, to the byte.
+
+With --impose fold the pages come two by two on the next larger paper, in the
+order that makes a booklet when the sheets are printed on both sides, folded
+together and stapled; with --impose two-up, pages that face each other come side
+by side. A page in front tells how to print.`,
 		Example: `  ebbleaf press almanac.yaml
   ebbleaf press almanac.yaml -o tides-2027.pdf --replace
+  ebbleaf press almanac.yaml --impose fold   to print, fold and staple
   ebbleaf press                              the example, to see what comes out`,
 		Args: func(cmd *cobra.Command, args []string) error {
 			if len(args) > 1 {
@@ -44,9 +50,14 @@ files always give the same booklet, to the byte.`,
 	flags.SortFlags = false
 	out := flags.StringP("output", "o", "", "name of the PDF; - for standard output (default: the almanac file's name)")
 	replace := flags.Bool("replace", false, "replace a PDF that is there already")
+	var on imposing
+	on.flags(cmd)
 	cmd.RunE = func(cmd *cobra.Command, args []string) error {
 		if cmd.Flags().Changed("output") && *out == "" {
 			return badUsage(cmd, "--output is empty: give the name of the PDF")
+		}
+		if err := on.check(cmd); err != nil {
+			return err
 		}
 		file, name := document.In(templates.Starter(), demoAlmanac), ""
 		if len(args) == 1 {
@@ -61,10 +72,11 @@ files always give the same booklet, to the byte.`,
 			name = demoName(a)
 			p.say("This is the example that comes with Ebbleaf: its harbour and its tides are invented.")
 		}
+		name = on.fileName(name)
 		if *out != "" {
 			name = *out
 		}
-		made, err := typeset(a)
+		made, err := on.typeset(a)
 		if err != nil {
 			return fmt.Errorf("%s: %w", file, err)
 		}
@@ -106,6 +118,7 @@ func (p *program) almanac(file document.File) (*layout.Almanac, error) {
 type printed struct {
 	data  []byte
 	pages int
+	on    string // what they stand on, where that is not paper of their size
 }
 
 // typeset makes the PDF of an almanac.
@@ -122,12 +135,15 @@ func typeset(a *layout.Almanac) (*printed, error) {
 	if err != nil {
 		return nil, err
 	}
-	return &printed{data, len(doc.Pages)}, nil
+	return &printed{data, len(doc.Pages), ""}, nil
 }
 
 // deliver writes a print to a file, or to standard output for the name -.
 func (p *program) deliver(made *printed, name string, replace bool) error {
 	size := fmt.Sprintf("%d pages, %d kB", made.pages, (len(made.data)+999)/1000)
+	if made.on != "" {
+		size = fmt.Sprintf("%d pages %s, %d kB", made.pages, made.on, (len(made.data)+999)/1000)
+	}
 	if name == "-" {
 		if _, err := p.stdout.Write(made.data); err != nil {
 			return fmt.Errorf("the PDF could not be written: %w", err)

@@ -14,6 +14,10 @@ import (
 // PrintScaling is the youngest [PDF table 150].
 const version = "1.6"
 
+// duplexVersion is the one that asking for both sides of the paper needs
+// [PDF table 150].
+const duplexVersion = "1.7"
+
 // finish replaces the end of fpdf's file, from the catalog on, with one that
 // holds what fpdf does not offer: an outline that is right where pages differ
 // in size, page labels, the language, what to show and how to print, and a file
@@ -27,7 +31,12 @@ func finish(file []byte, doc page.Document, sheets []sheet, opts Options) ([]byt
 	root := len(offsets) - 1
 	tagSubsets(file[:offsets[root]])
 	t := &tail{out: file[:offsets[root]:offsets[root]], offsets: offsets[:root]}
-	copy(t.out, "%PDF-"+version) // as long as the header that stands there
+	folded := opts.Impose != nil && opts.Impose.Arrangement == Fold
+	head := "%PDF-" + version // as long as the header that stands there
+	if folded {
+		head = "%PDF-" + duplexVersion
+	}
+	copy(t.out, head)
 	where := spots(doc, sheets)
 
 	// The catalog [PDF 7.7.2] keeps its number, and what it needs comes after.
@@ -50,6 +59,9 @@ func finish(file []byte, doc page.Document, sheets []sheet, opts Options) ([]byt
 	t.printf(" /ViewerPreferences <</DisplayDocTitle %t", doc.Title != "")
 	if opts.TrueSize {
 		t.printf(" /PrintScaling /None")
+	}
+	if folded {
+		t.printf(" /Duplex /DuplexFlipShortEdge")
 	}
 	t.printf(">>>>\nendobj\n")
 	t.end(root)

@@ -31,6 +31,8 @@ type Options struct {
 	Spreads bool
 	// TrueSize asks the print dialogue not to scale the pages to the paper.
 	TrueSize bool
+	// Impose puts the pages on larger paper; nil leaves them as they are.
+	Impose *Imposition
 }
 
 // producer names the program in the file.
@@ -41,10 +43,21 @@ const producer = "Ebbleaf"
 // rune that the face has no glyph for, a link to a page that is not there, a
 // page without size, a date that does not exist.
 func Write(doc page.Document, set *face.Set, opts Options) ([]byte, error) {
-	if err := refuse(doc, set); err != nil {
+	whole := doc
+	if im := opts.Impose; im != nil && im.Front != nil && len(doc.Pages) > 0 {
+		whole.Pages = append(doc.Pages[:len(doc.Pages):len(doc.Pages)], *im.Front)
+	}
+	if err := refuse(whole, set); err != nil {
 		return nil, err
 	}
-	return compose(doc, set, plain(doc), opts)
+	sheets := plain(doc)
+	if opts.Impose != nil {
+		var err error
+		if sheets, err = opts.Impose.arrange(doc); err != nil {
+			return nil, err
+		}
+	}
+	return compose(whole, set, sheets, opts)
 }
 
 // compose draws the document on the sheets. Each page is drawn by one function
@@ -66,6 +79,7 @@ func compose(doc page.Document, set *face.Set, sheets []sheet, opts Options) (ou
 		for _, p := range s.places {
 			d.page(&doc.Pages[p.page], p)
 		}
+		d.page(&page.Page{Items: s.marks}, place{})
 		d.flush()
 		if err := f.Error(); err != nil {
 			return nil, fmt.Errorf("page %d of the PDF could not be drawn: %w", i+1, err)

@@ -6,6 +6,7 @@ import "ebbleaf/layout/page"
 type sheet struct {
 	width, height float64 // millimetres
 	places        []place
+	marks         []page.Item // around the pages, in the sheet's own measure
 }
 
 // place says where a page of the document stands on its sheet: x, y is where
