@@ -180,10 +180,10 @@ func (b *book) plannerClock(s *sheet, m *monthPart, d *Day, row page.Rect, clock
 		share = 0
 	}
 	// At mean springs a stroke is as wide as an hour and a half, so that double
-	// high waters stay apart.
-	const widest, thinnest = 1.5, 0.25 // hours
-	weight := max(thinnest, min(widest*share, 2)) * clock.W / 24 / page.PointMM
-	weight = max(weight, hairline)
+	// high waters stay apart, but no wider than keeps it clear of the figures.
+	const hours, widest = 1.5, 0.9
+	springs := min(hours*clock.W/24, widest*b.scale()) / page.PointMM
+	weight := max(hairline, springs*min(max(share, 0.15), 1.3))
 	for _, t := range highWaters(d) {
 		h := at(scale.hour(t.Time))
 		stroke := page.Rule(h, row.Y+0.1*row.H, h, row.Bottom()-0.1*row.H, weight, s.ink.Accent)
